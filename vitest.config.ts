@@ -1,0 +1,18 @@
+import { defineConfig } from 'vitest/config';
+
+// One run, four projects: engine and shared code, published truth, the API, and the screens' parts in jsdom.
+export default defineConfig({
+  test: {
+    projects: [
+      { test: { name: 'shared', include: ['shared/src/**/*.test.ts'], environment: 'node' } },
+      { test: { name: 'truth', include: ['tests/truth/**/*.test.ts'], environment: 'node' } },
+      {
+        test: { name: 'backend', include: ['backend/src/**/*.test.ts', 'tests/api/**/*.test.ts'], environment: 'node', testTimeout: 20000 },
+      },
+      {
+        extends: './frontend/vite.config.ts',
+        test: { name: 'frontend', include: ['frontend/src/**/*.test.{ts,tsx}'], environment: 'jsdom' },
+      },
+    ],
+  },
+});
