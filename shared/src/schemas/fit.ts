@@ -72,12 +72,10 @@ export const FitQuestion = z
     lowerUnits: z.array(FitEngine).max(6),
     transducer: z.union([PartId, InlineTransducer]),
     mount: z.union([PartId, InlineMount]).optional(),
-    placement: z
-      .strictObject(placementFields)
-      .refine((p) => p.tiltDeg === undefined || p.bracketSettingDeg === undefined, {
-        path: ['bracketSettingDeg'],
-        message: 'give tiltDeg or bracketSettingDeg, not both',
-      }),
+    placement: z.strictObject(placementFields).refine((p) => p.tiltDeg === undefined || p.bracketSettingDeg === undefined, {
+      path: ['bracketSettingDeg'],
+      message: 'give tiltDeg or bracketSettingDeg, not both',
+    }),
     running: z.strictObject(runningFields),
     alsoAt: z
       .array(
