@@ -1,0 +1,32 @@
+import { Link, useLocation, useNavigate } from 'react-router';
+import { Button } from '../../../components/ui/button.tsx';
+import { paths } from '../../../lib/paths.ts';
+import { useEndSession } from '../api/end-session.ts';
+import { useSession } from '../api/get-session.ts';
+
+/** "Sign in", or who is signed in and the way out. */
+export function AccountLinks() {
+  const session = useSession();
+  const end = useEndSession();
+  const navigate = useNavigate();
+  const { pathname, search } = useLocation();
+  const account = session.data?.account;
+
+  if (!account) {
+    const next = pathname === paths.signIn || pathname === paths.signUp ? '' : `?next=${encodeURIComponent(pathname + search)}`;
+    return (
+      <Link to={`${paths.signIn}${next}`} className="flex min-h-11 items-center px-2">
+        Sign in
+      </Link>
+    );
+  }
+  const signOut = () => end.mutate(undefined, { onSuccess: () => navigate(paths.home) });
+  return (
+    <>
+      <span className="hidden max-w-40 truncate text-ink-2 tablet:inline">{account.name}</span>
+      <Button kind="bare" onClick={signOut} busy={end.isPending && 'Signing out'}>
+        Sign out
+      </Button>
+    </>
+  );
+}

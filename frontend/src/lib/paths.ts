@@ -1,0 +1,24 @@
+// Every address of the site, in one place. Parts of an address that come from data are escaped here.
+import type { CatalogTable } from '@tiltwright/shared/schemas/catalog-record.ts';
+
+const sheet = (table: CatalogTable) => (id: string) => `/${table}/${encodeURIComponent(id)}`;
+
+export const paths = {
+  home: '/',
+  fit: '/fit',
+  fitForHull: (id: string) => `/fit?hull=${encodeURIComponent(id)}`,
+  hull: sheet('hulls'),
+  lowerUnit: sheet('lower-units'),
+  transducer: sheet('transducers'),
+  mount: sheet('mounts'),
+  part: (table: CatalogTable, id: string) => sheet(table)(id),
+  signIn: '/sign-in',
+  signUp: '/sign-up',
+  steward: '/steward',
+  stewardImport: (id: string) => `/steward/imports/${encodeURIComponent(id)}`,
+} as const;
+
+/** Only an address of this site, so that a link cannot send someone elsewhere after signing in. */
+export function safeNext(next: string | null): string {
+  return next?.startsWith('/') && !next.startsWith('//') && !next.startsWith('/\\') ? next : paths.home;
+}
