@@ -1,0 +1,63 @@
+// From the page's state to the question the API answers.
+import type { FitQuestionInput } from '@tiltwright/shared/schemas/fit.ts';
+import { type FitState, standardState } from './fit-state.ts';
+
+export const cruisingLabel = 'cruising';
+
+/** The question for this state; what is not known is left out, so that class values stand in and are listed as assumed. */
+export function fitQuestionOf(state: FitState): FitQuestionInput {
+  const { offsetMm, dropMm, boardMm } = state;
+  return {
+    hull: state.hull ?? {
+      form: state.form,
+      lengthM: state.lengthM,
+      ...known('deadriseDeg', state.deadriseDeg),
+      ...known('transomAngleDeg', state.transomAngleDeg),
+      ...known('transomHeightMm', state.transomHeightMm),
+    },
+    lowerUnits: motorOffsetsMm(state).map((offset) => ({ lowerUnit: lowerUnitOf(state), offsetMm: offset, ...motorPose(state) })),
+    transducer: state.sensor ?? { kinds: ['side'], housingLengthMm: state.housingLengthMm },
+    ...(state.mount !== null && { mount: state.mount }),
+    placement: { offsetMm, dropMm, boardMm, ...known('standoffMm', state.standoffMm), ...known('tiltDeg', state.tiltDeg) },
+    running: {
+      speedKn: state.scanKn,
+      water: state.water,
+      ...known('loadedMassKg', state.loadedMassKg),
+      ...known('measuredTrimDeg', state.measuredTrimDeg),
+    },
+    ...(state.cruiseKn !== null && {
+      alsoAt: [{ label: cruisingLabel, speedKn: state.cruiseKn, ...known('motorTrimDeg', state.cruiseMotorTrimDeg) }],
+    }),
+    wanted: state.wanted,
+    target: { attitudeDeg: state.targetDeg },
+  };
+}
+
+/** Port motor first, so that the order is the same as on the drawing from left to right. */
+export function motorOffsetsMm({ motors, motorOffsetMm }: Pick<FitState, 'motors' | 'motorOffsetMm'>): number[] {
+  if (motors === 'none') return [];
+  return motors === 'two' ? [-motorOffsetMm, motorOffsetMm] : [0];
+}
+
+/** Names the motor a sector is hidden by: "port motor" of two, plain "motor" of one. */
+export function motorName(state: Pick<FitState, 'motors'>, unit: number): string {
+  if (state.motors !== 'two') return 'motor';
+  return unit === 0 ? 'port motor' : 'starboard motor';
+}
+
+function lowerUnitOf(state: FitState) {
+  return state.motor ?? { drive: 'outboard' as const, powerHp: state.powerHp, ...known('shaftLengthMm', state.shaftLengthMm) };
+}
+
+function motorPose({ motorTrimDeg, steerDeg, setbackMm, raiseMm }: FitState) {
+  return { motorTrimDeg, steerDeg, setbackMm, raiseMm };
+}
+
+function known<K extends string>(name: K, value: number | null): Partial<Record<K, number>> {
+  return value === null ? {} : ({ [name]: value } as Record<K, number>);
+}
+
+/** True where nothing about the boat has been said yet. */
+export function isUntouched(state: FitState): boolean {
+  return (Object.keys(state) as (keyof FitState)[]).every((name) => state[name] === standardState[name]);
+}

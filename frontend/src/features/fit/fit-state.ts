@@ -1,0 +1,61 @@
+// What the page asks about, as one flat value. The address carries it whole (see fit-url.ts).
+import type { HullForm } from '@tiltwright/shared/schemas/hull.ts';
+import { type FitField, type FitFieldName, fitFieldNames, fitFields } from './fit-fields.ts';
+
+type FieldValue<F extends FitField> = F['standard'] extends null ? number | null : number;
+type FitNumbers = { [K in FitFieldName]: FieldValue<(typeof fitFields)[K]> };
+
+export const motorCounts = ['one', 'two', 'none'] as const;
+export type MotorCount = (typeof motorCounts)[number];
+export const waterKinds = ['fresh', 'sea'] as const;
+export const sidesWanted = ['both', 'port', 'starboard'] as const;
+
+/** The bottom's shapes in a rigger's words; the schema's own list is not fetched just for this. */
+export const formWords: Record<HullForm, string> = {
+  flat: 'flat, a jon boat or skiff',
+  'shallow-v': 'shallow vee, under 16°',
+  'modified-v': 'modified vee, 16 to 20°',
+  'deep-v': 'deep vee, 20° and more',
+  'tri-hull': 'three hulls in one (tri-hull)',
+  pontoon: 'pontoons',
+  catamaran: 'catamaran',
+  other: 'something else',
+};
+export const hullForms = Object.keys(formWords) as HullForm[];
+
+export interface FitState extends FitNumbers {
+  /** Catalog ids; null where the boat or part is described by its class instead. */
+  hull: string | null;
+  motor: string | null;
+  sensor: string | null;
+  mount: string | null;
+  form: HullForm;
+  motors: MotorCount;
+  water: (typeof waterKinds)[number];
+  wanted: (typeof sidesWanted)[number];
+}
+
+/** The words that are chosen from a list: name, choices, and which stands where nothing is said. */
+export const fitChoices = {
+  form: { choices: hullForms, standard: 'shallow-v' },
+  motors: { choices: motorCounts, standard: 'one' },
+  water: { choices: waterKinds, standard: 'fresh' },
+  wanted: { choices: sidesWanted, standard: 'both' },
+} as const;
+export type FitChoiceName = keyof typeof fitChoices;
+
+export const fitParts = ['hull', 'motor', 'sensor', 'mount'] as const;
+export type FitPartName = (typeof fitParts)[number];
+
+/** A 4.5 m shallow vee with one 30 hp motor and a sensor 380 mm to starboard, scanning at 4 kn. */
+export const standardState: FitState = {
+  ...(Object.fromEntries(fitFieldNames.map((name) => [name, fitFields[name].standard])) as FitNumbers),
+  hull: null,
+  motor: null,
+  sensor: null,
+  mount: null,
+  form: fitChoices.form.standard,
+  motors: fitChoices.motors.standard,
+  water: fitChoices.water.standard,
+  wanted: fitChoices.wanted.standard,
+};
