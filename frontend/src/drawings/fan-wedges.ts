@@ -1,7 +1,6 @@
 // A side's fan cut into what is clear, thinned and hidden, in depression below the sensor's own horizontal.
-import type { Point3 } from './views.ts';
-
-export type Side = 'port' | 'starboard';
+import type { Side } from '@tiltwright/shared/engine/beams/fan.ts';
+import type { Vec3 } from '@tiltwright/shared/engine/vec3.ts';
 
 /** What stands in a sector's way, in words, e.g. "strut" or "skeg of the port motor". */
 export interface FanSector {
@@ -41,7 +40,7 @@ export function fanWedges(fromDeg: number, toDeg: number, sectors: readonly FanS
 }
 
 /** Direction of a depression in the sensor frame: starboard positive across, down positive. */
-export function fanDirection(side: Side, depressionDeg: number): Point3 {
+export function fanDirection(side: Side, depressionDeg: number): Vec3 {
   const depression = (depressionDeg * Math.PI) / 180;
   return [0, (side === 'starboard' ? 1 : -1) * Math.cos(depression), Math.sin(depression)];
 }

@@ -1,8 +1,7 @@
 // The three ways the boat is drawn, each a flat projection of the boat frame
 // (+x forward, +y starboard, +z down; metres). On paper u runs to the right and v runs down.
+import type { Vec3 } from '@tiltwright/shared/engine/vec3.ts';
 
-/** A point of the boat frame, metres. */
-export type Point3 = readonly [number, number, number];
 /** A point on paper, metres before scaling: u to the right, v down. */
 export type Point2 = readonly [number, number];
 
@@ -13,7 +12,7 @@ export type View = (typeof views)[number];
  * Projects a point of the boat frame (or of the water frame, for the side view) onto paper.
  * Astern looks forward, so starboard is right; the side view looks from port, so the bow is left; above has the bow at the top.
  */
-export function project(view: View, [x, y, z]: Point3): Point2 {
+export function project(view: View, [x, y, z]: Vec3): Point2 {
   switch (view) {
     case 'astern':
       return [y, z];
