@@ -24,3 +24,17 @@ export function project(view: View, [x, y, z]: Vec3): Point2 {
       return view satisfies never;
   }
 }
+
+/** How far a point is from the eye along the view, for drawing the farthest first; only differences mean anything. Metres. */
+export function depthInView(view: View, [x, y, z]: Vec3): number {
+  switch (view) {
+    case 'astern':
+      return x;
+    case 'side':
+      return y;
+    case 'above':
+      return z;
+    default:
+      return view satisfies never;
+  }
+}
