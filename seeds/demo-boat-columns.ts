@@ -65,6 +65,13 @@ export const demoBoatColumns: readonly DemoBoatColumn[] = [
   bounded('tilt_deg', 'deg', tiltDeg.unwrap(), 'Set tilt against the keel line', 'Nose-up (heel-down) positive.'),
   bounded('speed_kn', 'kn', speedKn, 'Speed while scanning', 'Through the water.'),
   bounded('cruise_kn', 'kn', speedKn, 'Cruising speed', 'Through the water.'),
+  bounded(
+    'cruise_motor_trim_deg',
+    'deg',
+    motorTrimDeg.unwrap(),
+    'Motor trim while cruising',
+    '0 with the prop shaft parallel to the keel line.',
+  ),
   { column: 'water', required: true, kind: 'enum', values: waters, label: 'Water' },
   {
     column: 'target_deg',
