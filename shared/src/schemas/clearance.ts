@@ -6,7 +6,7 @@ import { InlineLowerUnit, rotations } from './lower-unit.ts';
 import { InlineMount } from './mount.ts';
 import { InlineTransducer } from './transducer.ts';
 
-const { offsetMm, dropMm, standoffMm, boardMm, forwardMm, rollDeg, yawDeg, tiltDeg } = placementFields;
+const { offsetMm, dropMm, standoffMm, boardMm, forwardMm, localBottomMm, rollDeg, yawDeg, tiltDeg } = placementFields;
 const { setbackMm, raiseMm, motorTrimDeg, steerDeg } = engineFields;
 export const clearanceFields = {
   offsetMm,
@@ -14,6 +14,7 @@ export const clearanceFields = {
   standoffMm,
   boardMm,
   forwardMm,
+  localBottomMm,
   rollDeg,
   yawDeg,
   tiltDeg: tiltDeg.unwrap().default(0).describe('Set tilt against the keel line, nose-up positive.'),

@@ -38,6 +38,12 @@ export const placementFields = {
   standoffMm: z.number().min(0).max(2000).optional().describe('Transom face (or board) to leading edge; the mount’s, else 25.'),
   boardMm: z.number().min(0).max(300).default(0).describe('Thickness of a transom board; added to the standoff.'),
   forwardMm: z.number().min(-3000).max(30000).optional().describe('Ahead of the transom; for through-hull, in-hull, pole and bow mounts.'),
+  localBottomMm: z
+    .number()
+    .min(-1500)
+    .max(1500)
+    .optional()
+    .describe('Bottom at the sensor below the keel line; needed on pontoons, catamarans and stepped hulls, where no vee tells it.'),
   rollDeg: z.number().min(-180).max(180).default(0),
   yawDeg: z.number().min(-180).max(180).default(0),
   tiltDeg: z.number().min(-60).max(60).optional().describe('Set tilt against the keel line, nose-up positive; left out, the needed one.'),

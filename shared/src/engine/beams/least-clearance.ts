@@ -1,0 +1,86 @@
+// How close an unblocked beam passes to the nearest part, and how close is too close for sound.
+import type { Pose } from '../frames.ts';
+import type { SideElement } from '../sensor.ts';
+import { boundingRadiusM, distanceToSolid, type Solid } from '../solids/solid.ts';
+import { marginRangeM, reachM } from '../thresholds.ts';
+import type { Vec3 } from '../vec3.ts';
+import type { Fan, Side } from './fan.ts';
+import { cellOrigins, rayDirection } from './slab.ts';
+
+export interface NearestPass {
+  /** Smallest distance of a ray to any solid but the hull, m. */
+  clearanceM: number;
+  /** How far along its ray that is, m. */
+  alongM: number;
+}
+
+/** Radius of the first Fresnel zone at s on the way to R: √(λ s (R − s)/R). Metres; s between 0 and R. */
+export function diffractionMarginM(wavelengthM: number, alongM: number, rangeM = marginRangeM): number {
+  const s = Math.min(Math.max(alongM, 0), rangeM);
+  return Math.sqrt((wavelengthM * s * (rangeM - s)) / rangeM);
+}
+
+/** The closest pass of a slab's rays to any solid but the hull within 5 m; null where nothing is near enough to be reached. */
+export function nearestPass(solids: readonly Solid[], sensor: Pose, element: SideElement, fan: Fan, side: Side): NearestPass | null {
+  const half = element.alongTrackWidthRad / 2;
+  const origins = cellOrigins(sensor, element.apertureM);
+  let best: NearestPass | null = null;
+  let limit = reachM;
+  for (const solid of solids) {
+    if (solid.shape.kind === 'prism') continue;
+    const radius = boundingRadiusM(solid.shape);
+    for (const depression of fan.depressionsRad) {
+      for (let way = -1; way <= 1; way++) {
+        const direction = rayDirection(sensor, side, depression, way * half);
+        for (const origin of origins) {
+          if (distanceToSegment(solid.pose.originM, origin, direction) - radius >= limit) continue;
+          const pass = passOf(solid, origin, direction);
+          if (pass.clearanceM < limit) {
+            limit = pass.clearanceM;
+            best = pass;
+          }
+        }
+      }
+    }
+  }
+  return best;
+}
+
+function distanceToSegment(point: Vec3, origin: Vec3, direction: Vec3): number {
+  const x = point[0] - origin[0];
+  const y = point[1] - origin[1];
+  const z = point[2] - origin[2];
+  const along = Math.min(reachM, Math.max(0, x * direction[0] + y * direction[1] + z * direction[2]));
+  return Math.hypot(x - along * direction[0], y - along * direction[1], z - along * direction[2]);
+}
+
+const inverseGolden = (Math.sqrt(5) - 1) / 2;
+
+/** Distance to a convex body is convex along a line, so a golden section finds its least value (to 1e-7 m along the ray). */
+function passOf(solid: Solid, origin: Vec3, direction: Vec3): NearestPass {
+  const at = (t: number) =>
+    distanceToSolid(solid, [origin[0] + t * direction[0], origin[1] + t * direction[1], origin[2] + t * direction[2]]);
+  let low = 0;
+  let high = reachM;
+  let left = high - inverseGolden * (high - low);
+  let right = low + inverseGolden * (high - low);
+  let atLeft = at(left);
+  let atRight = at(right);
+  while (high - low > 1e-7) {
+    if (atLeft <= atRight) {
+      high = right;
+      right = left;
+      atRight = atLeft;
+      left = high - inverseGolden * (high - low);
+      atLeft = at(left);
+    } else {
+      low = left;
+      left = right;
+      atLeft = atRight;
+      right = low + inverseGolden * (high - low);
+      atRight = at(right);
+    }
+  }
+  const alongM = (low + high) / 2;
+  return { clearanceM: at(alongM), alongM };
+}

@@ -1,0 +1,64 @@
+// From numbers to a verdict, its reasons and one thing to do.
+
+import type { Side } from '../engine/beams/fan.ts';
+import { actionTexts, coded, type ReasonCode, reasonCodes } from '../engine/codes.ts';
+import { sigmasIn90 } from '../engine/estimate.ts';
+import type { TiltAnswer, TrimAnswer } from '../schemas/answer.ts';
+import type { Action, Verdict } from '../schemas/fit.ts';
+import type { BothSides } from './evaluate.ts';
+
+/** What the verdict is drawn from. */
+export interface Findings {
+  faults: readonly ReasonCode[];
+  sides: BothSides | null;
+  wanted: readonly Side[];
+  trim: TrimAnswer;
+  tilt: TiltAnswer;
+  /** Whether the wanted sides clear, or at least are no longer blocked, at some setting within reach. */
+  reach: { unblocked: boolean; clearByMotorTrim: boolean; clearByTilt: boolean };
+}
+
+export interface Judgement {
+  verdict: Verdict;
+  reasons: { code: ReasonCode; text: string }[];
+  action: { code: Action; text: string };
+}
+
+export function judge(f: Findings): Judgement {
+  const codes: ReasonCode[] = [...f.faults];
+  const wanted = f.sides ? f.wanted.map((side) => (f.sides as BothSides)[side]) : [];
+  if (!f.sides) codes.push('no-side-element');
+  if (wanted.some(({ verdict }) => verdict === 'blocked')) codes.push(f.reach.unblocked ? 'side-blocked' : 'blocked-at-every-setting');
+  if (wanted.some(({ verdict }) => verdict === 'shaded')) codes.push('side-shaded');
+  if (f.tilt.inBracketRange === false) codes.push('tilt-out-of-range');
+  if (wanted.some(isNear)) codes.push('near-a-part');
+  const verdict = verdictOf(f, codes);
+  if (codes.length === 0) codes.push('all-clear');
+  const action = actionOf(f, verdict, codes);
+  return { verdict, reasons: codes.map((code) => coded(reasonCodes, code)), action: { code: action, text: actionTexts[action] } };
+}
+
+/** An unblocked beam that passes nearer to a part than the diffraction margin. */
+export function isNear(side: BothSides['port']): boolean {
+  const { leastClearanceM, diffractionMarginM } = side;
+  return leastClearanceM !== null && diffractionMarginM !== null && leastClearanceM < diffractionMarginM;
+}
+
+function verdictOf(f: Findings, codes: readonly ReasonCode[]): Verdict {
+  if (f.faults.length > 0) return 'cannot-tell';
+  if (codes.includes('blocked-at-every-setting')) return 'does-not-fit';
+  return codes.every((code) => code === 'no-side-element') ? 'fits' : 'fits-with-care';
+}
+
+function actionOf(f: Findings, verdict: Verdict, codes: readonly ReasonCode[]): Action {
+  if (verdict === 'cannot-tell') return 'measure-first';
+  if (verdict === 'does-not-fit') return 'move';
+  if (codes.includes('tilt-out-of-range')) return 'add-wedge';
+  if (codes.includes('side-blocked') || codes.includes('side-shaded')) {
+    if (f.reach.clearByMotorTrim) return 'trim-motor-up';
+    return f.reach.clearByTilt ? 're-tilt' : 'move';
+  }
+  // Advice to re-tilt must gain more than the tilt itself is uncertain by.
+  const off = Math.abs(f.tilt.setDeg - f.tilt.neededDeg);
+  return off > sigmasIn90 * f.trim.sigmaDeg ? 're-tilt' : 'leave';
+}
