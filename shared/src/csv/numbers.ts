@@ -36,7 +36,7 @@ export function numberReader(column: Column, options: NumberOptions = {}): Numbe
       if (value >= min && value <= max && (!integer || Number.isInteger(value))) return filled(value + 0);
     }
     const text = plainMarks(tidied);
-    const found = read(text) ?? explain(text, read);
+    const found = readOrExplain(text, read);
     if (!found.ok) return found;
     if (integer && !Number.isInteger(found.value)) return refused('not-whole', `${quoted(tidied)} is not a whole number.`);
     if (found.value >= min && found.value <= max) return filled(found.value + 0); // + 0: no negative zero
@@ -85,6 +85,14 @@ const byStroke = /^(.*[a-z"'°])\s*[/=]\s*(\d.*)$/i;
 
 /** Two statements of one value, `20 in (508 mm)`, may differ by the rounding of either. */
 const roundingShare = 0.01;
+
+/** A word where a unit should stand may be part of a range or a remark: that says more than an unknown unit. */
+function readOrExplain(text: string, read: Read): Quantity | CellError {
+  const found = read(text);
+  if (found?.ok || (found && found.code !== 'unknown-unit')) return found;
+  const explained = explain(text, read);
+  return found && !explained.ok && explained.code === 'not-a-number' ? found : explained;
+}
 
 /** A text that is no plain quantity: perhaps one stated twice, else an error that says what it could mean. */
 function explain(text: string, read: Read): Quantity | CellError {
