@@ -195,8 +195,10 @@ describe('a table', () => {
     ['maker,model,beam_m\na,b,2.1\n', false],
     ['maker;model;beam_m;length_m\na;b;2,1;5.2\n', undefined],
     ['maker;model;dry_mass_kg\na;b;1,234\n', undefined],
+    ['maker,model,beam_m,notes\na,b,2.134,"2,5 m platform"\n', undefined],
+    ['maker,model,beam_m\na,"2,5",2.134\n', undefined],
   ])('of %j says that the comma is the decimal mark: %s', (text, comma) => {
-    expect(table(text).decimalComma).toBe(comma);
+    expect(table(text, { table: 'hulls' }).decimalComma).toBe(comma);
   });
 
   it('recognises a spreadsheet named .csv', () => {

@@ -188,6 +188,16 @@ function readUnitRow(
 /** Cells looked at for the decimal mark. */
 const decimalSampleRows = 2000;
 
+/** Cells of the first rows that may hold numbers: those of text columns are no evidence of a decimal mark. */
+function numberCells(header: readonly string[], rows: readonly TableRow[], table?: Table): string[] {
+  const texts = header.map((text) => {
+    const name = table && canonicalName(table, text);
+    const kind = name && findColumn(table, name)?.kind;
+    return kind !== undefined && kind !== 'number' && kind !== 'integer';
+  });
+  return rows.slice(0, decimalSampleRows).flatMap(({ cells }) => cells.filter((_, at) => !texts[at]));
+}
+
 /**
  * A whole file → header and rows, or what is wrong with it.
  * @param bytes the file as uploaded
@@ -219,6 +229,6 @@ export function parseTable(bytes: Uint8Array, options: TableOptions = {}): Parse
     if (cells.some((cell) => cell.trim() !== '')) rows.push({ n: i + 1, cells });
   }
   if (rows.length > maxRows) return { problem: 'too-many-rows', message: `More than ${maxRows} rows; split the file.` };
-  const decimalComma = detectDecimalComma(rows.slice(0, decimalSampleRows).flatMap((row) => row.cells));
+  const decimalComma = detectDecimalComma(numberCells(header, rows, options.table));
   return { header, headerRow, ...(unitRow && { unitRow }), rows, delimiter, encoding: decoded.encoding, decimalComma };
 }

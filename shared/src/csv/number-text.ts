@@ -44,6 +44,9 @@ function readOneMark(before: string, mark: '.' | ',', after: string, decimalComm
   return { value: asDecimal };
 }
 
+/** A cell that is a number and perhaps its unit, with one mark that can't be grouping thousands. */
+const decimal = /^\s*[-+\u2212]?(?:\d*([.,])(?:\d{1,2}|\d{4,})|0([.,])\d{3})\s*[a-z°"'%/]{0,6}\.?\s*$/i;
+
 /**
  * Whether a table's decimal mark is the comma, from its cells: true or false where only one mark is used in numbers
  * that cannot be grouped thousands, undefined where there is no evidence or both are used.
@@ -52,7 +55,7 @@ export function detectDecimalComma(cells: Iterable<string>): DecimalComma {
   let commas = 0;
   let points = 0;
   for (const cell of cells) {
-    const mark = /^\s*[-+\u2212]?(?:\d*([.,])(?:\d{1,2}|\d{4,})|0([.,])\d{3})(?![.,\d])/.exec(cell);
+    const mark = decimal.exec(cell);
     const found = mark?.[1] ?? mark?.[2];
     if (found === ',') commas++;
     else if (found === '.') points++;
