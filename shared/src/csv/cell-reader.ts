@@ -14,7 +14,7 @@ import { choiceReader } from './choices.ts';
 import type { Column } from './columns.ts';
 import { readDate } from './dates.ts';
 import { listReader } from './lists.ts';
-import { type NumberOptions, numberReader } from './numbers.ts';
+import { type NumberOptions, numberReader, plainNumberReader } from './numbers.ts';
 import { readWords } from './words.ts';
 import { readYears } from './years.ts';
 
@@ -23,10 +23,32 @@ export type CellReader = (text: string) => CellResult;
 
 /** A reader for one column; make it once for a whole table. */
 export function cellReader(column: Column, options: CellOptions = {}): CellReader {
-  const read = filledReader(column, options);
-  return (text) => {
+  const readFilled = filledReader(column, options);
+  const read: CellReader = (text) => {
     const tidied = tidy(text);
-    return readBlank(tidied) ?? readSpreadsheetError(tidied) ?? read(tidied);
+    return readBlank(tidied) ?? readSpreadsheetError(tidied) ?? readFilled(tidied);
+  };
+  if (column.kind === 'enum' || column.kind === 'date') return remembering(read);
+  const isNumber = (column.kind === 'number' || column.kind === 'integer') && column.unit !== 'year';
+  const readPlain = isNumber ? plainNumberReader(column, options) : undefined;
+  if (!readPlain) return read;
+  return (text) => {
+    const value = readPlain(text);
+    return Number.isNaN(value) ? read(text) : filled(value);
+  };
+}
+
+/** Choices and dates repeat from row to row: the first few hundred readings are kept. Only for results that nobody changes. */
+function remembering(read: CellReader): CellReader {
+  const most = 500;
+  const known = new Map<string, CellResult>();
+  return (text) => {
+    let found = known.get(text);
+    if (found === undefined) {
+      found = read(text);
+      if (known.size < most) known.set(text, found);
+    }
+    return found;
   };
 }
 

@@ -72,10 +72,17 @@ const dashes = /^[-\u2010-\u2015\u2212_]+$/;
 const questionMarks = /^\?+$/;
 const longestBlankWord = 13;
 
+/** False for nearly every cell that says something: figures, and letters other than the first of a blank word. */
+function mayBeBlank(first: number): boolean {
+  if (first >= 0x30 && first <= 0x39) return false;
+  const letter = first | 0x20;
+  return letter < 0x61 || letter > 0x7a || letter === 0x6e || letter === 0x74 || letter === 0x75; // n, t, u
+}
+
 /** Reads "nothing stated": an empty cell, dashes, `none`, `n/a`, `?`, `unknown`. Undefined where the cell says something. */
 export function readBlank(trimmed: string): CellBlank | undefined {
   if (trimmed === '') return empty;
-  if (trimmed.length > longestBlankWord) return undefined;
+  if (trimmed.length > longestBlankWord || !mayBeBlank(trimmed.charCodeAt(0))) return undefined;
   if (dashes.test(trimmed)) return erasing;
   if (questionMarks.test(trimmed)) return empty;
   const word = trimmed.toLowerCase();

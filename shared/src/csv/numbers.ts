@@ -20,26 +20,44 @@ function ownUnit(column: Column): CellUnit {
 
 const plainNumber = /^-?\d{1,9}(?:\.\d{1,9})?$/;
 
-/** A reader for one number column, its unit and limits settled once. Plain numbers take a short way. */
+/**
+ * The short way for the plain numbers that most cells hold: the value, or NaN where the cell needs a closer look.
+ * Undefined where there is no short way, because a point may group thousands.
+ */
+export function plainNumberReader(column: Column, options: NumberOptions = {}): ((text: string) => number) | undefined {
+  if (options.decimalComma === true) return undefined;
+  const unit = ownUnit(column);
+  const bareUnit = bareUnitOf(column, options);
+  const { min = Number.NEGATIVE_INFINITY, max = Number.POSITIVE_INFINITY } = column;
+  const integer = column.kind === 'integer';
+  return (text) => {
+    if (!plainNumber.test(text)) return Number.NaN;
+    const value = convert(Number(text), bareUnit, unit);
+    return value >= min && value <= max && (!integer || Number.isInteger(value)) ? value + 0 : Number.NaN; // + 0: no negative zero
+  };
+}
+
+function bareUnitOf(column: Column, options: NumberOptions): CellUnit {
+  const { unit } = options;
+  return unit && unitFacts[unit].dimension === dimensionOf(column) ? unit : ownUnit(column);
+}
+
+/** A reader for one number column, its unit and limits settled once. */
 export function numberReader(column: Column, options: NumberOptions = {}): NumberReader {
   const dimension = dimensionOf(column);
   const unit = ownUnit(column);
-  const bareUnit = options.unit && unitFacts[options.unit].dimension === dimension ? options.unit : unit;
+  const bareUnit = bareUnitOf(column, options);
   const { decimalComma } = options;
   const { min = Number.NEGATIVE_INFINITY, max = Number.POSITIVE_INFINITY } = column;
   const integer = column.kind === 'integer';
   const read = (text: string) => readQuantity(text, dimension, unit, bareUnit, decimalComma);
 
   return (tidied) => {
-    if (decimalComma !== true && plainNumber.test(tidied)) {
-      const value = convert(Number(tidied), bareUnit, unit);
-      if (value >= min && value <= max && (!integer || Number.isInteger(value))) return filled(value + 0);
-    }
     const text = plainMarks(tidied);
     const found = readOrExplain(text, read);
     if (!found.ok) return found;
     if (integer && !Number.isInteger(found.value)) return refused('not-whole', `${quoted(tidied)} is not a whole number.`);
-    if (found.value >= min && found.value <= max) return filled(found.value + 0); // + 0: no negative zero
+    if (found.value >= min && found.value <= max) return filled(found.value + 0);
     return outOfRange(tidied, found, column, dimension, unit, bareUnit);
   };
 }

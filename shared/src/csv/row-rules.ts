@@ -88,7 +88,7 @@ function outside(value: number, { least, most }: { least: number; most: number }
 }
 
 function hullCautions(values: Values, add: (field: string, code: string, message: string) => void): void {
-  const [length, beam, deadrise] = ['lengthM', 'beamM', 'deadriseDeg'].map((field) => number(values, field));
+  const [length, beam, deadrise] = [number(values, 'lengthM'), number(values, 'beamM'), number(values, 'deadriseDeg')];
   const [dry, loaded] = [number(values, 'dryMassKg'), number(values, 'loadedMassKg')];
   if (length !== undefined) {
     if (dry !== undefined && outside(dry / length ** 3, dryDensity)) {

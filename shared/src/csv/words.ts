@@ -15,8 +15,12 @@ function unguard(text: string): string {
   return guarded.test(text) ? text.slice(1) : text;
 }
 
+/** Begins with a letter or figure and is plain ASCII: nothing to guard, nothing to normalise. */
+const plain = /^[A-Za-z0-9][ -~]*$/;
+
 /** Reads a text of at most `maxLength` characters. `tidied` is trimmed and not blank. */
 export function readWords(tidied: string, maxLength: number): CellFilled<string> | CellError {
+  if (tidied.length <= maxLength && plain.test(tidied)) return filled(tidied);
   if (formulaStart.test(tidied)) {
     return refused('formula', `${quoted(tidied)} would run as a formula in a spreadsheet; put an apostrophe before it if it is text.`);
   }
