@@ -7,7 +7,13 @@ export default defineConfig({
       { test: { name: 'shared', include: ['shared/src/**/*.test.ts'], environment: 'node' } },
       { test: { name: 'truth', include: ['tests/truth/**/*.test.ts'], environment: 'node' } },
       {
-        test: { name: 'backend', include: ['backend/src/**/*.test.ts', 'tests/api/**/*.test.ts'], environment: 'node', testTimeout: 20000 },
+        test: {
+          name: 'backend',
+          include: ['backend/src/**/*.test.ts', 'tests/api/**/*.test.ts'],
+          environment: 'node',
+          testTimeout: 20_000,
+          globalSetup: './tests/support/seeded-database.ts',
+        },
       },
       {
         extends: './frontend/vite.config.ts',

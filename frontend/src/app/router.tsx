@@ -1,8 +1,15 @@
 import { lazy } from 'react';
 import { BrowserRouter, Route, Routes } from 'react-router';
+import Home from './routes/home.tsx';
 import { Shell } from './shell.tsx';
 
 // The first page comes with the first chunk; every other screen is fetched when it is opened.
+const Hull = lazy(() => import('./routes/hull.tsx'));
+const LowerUnit = lazy(() => import('./routes/lower-unit.tsx'));
+const Transducer = lazy(() => import('./routes/transducer.tsx'));
+const Mount = lazy(() => import('./routes/mount.tsx'));
+const SignIn = lazy(() => import('./routes/sign-in.tsx'));
+const SignUp = lazy(() => import('./routes/sign-up.tsx'));
 const NotFound = lazy(() => import('./routes/not-found.tsx'));
 
 export function Router() {
@@ -10,6 +17,13 @@ export function Router() {
     <BrowserRouter>
       <Routes>
         <Route element={<Shell />}>
+          <Route index element={<Home />} />
+          <Route path="hulls/:id" element={<Hull />} />
+          <Route path="lower-units/:id" element={<LowerUnit />} />
+          <Route path="transducers/:id" element={<Transducer />} />
+          <Route path="mounts/:id" element={<Mount />} />
+          <Route path="sign-in" element={<SignIn />} />
+          <Route path="sign-up" element={<SignUp />} />
           <Route path="*" element={<NotFound />} />
         </Route>
       </Routes>

@@ -38,7 +38,7 @@ export function Shell() {
 function Header() {
   const session = useSession();
   return (
-    <header className="flex flex-wrap items-stretch gap-x-6 border-b border-ink px-4 desk:px-6">
+    <header className="flex flex-wrap items-stretch gap-x-2 border-b border-ink px-4 tablet:gap-x-6 desk:px-6">
       <Link to={paths.home} className="flex min-h-14 items-center gap-2 text-lead font-strong no-underline">
         <Mark />
         Tiltwright
@@ -48,7 +48,7 @@ function Header() {
         <Way to={paths.fit}>Check a fit</Way>
         {mayAct(session.data?.account?.roles, 'steward') && <Way to={paths.steward}>Tables</Way>}
       </nav>
-      <div className="ml-auto flex items-center gap-2">
+      <div className="-mr-2 ml-auto flex items-center tablet:gap-2">
         <Preferences />
         <AccountLinks />
       </div>

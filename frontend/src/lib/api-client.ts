@@ -7,7 +7,8 @@ import { OfflineError, ProblemError, UnexpectedReplyError } from './problem.ts';
 export const apiBase = '/api/v1';
 
 export const api = createClient<paths>({
-  baseUrl: apiBase,
+  // Whole address: a Request made outside a browser (in tests) takes no relative one.
+  baseUrl: `${globalThis.location?.origin ?? ''}${apiBase}`,
   // Looked up at each call, so that a test can put its own in place.
   fetch: (request) => globalThis.fetch(request),
 });

@@ -20,8 +20,13 @@ const features = tableFeatures({
   sortFns: { alphanumeric: sortFn_alphanumeric, basic: sortFn_basic, datetime: sortFn_datetime, text: sortFn_text },
 });
 
-/** `header` must be words: on a narrow screen it stands before each cell. */
-export type TableColumn<T extends RowData> = ColumnDef<typeof features, T> & { header: string };
+/**
+ * Where a cell goes once the row is a short list on a narrow screen: at the head, at its right, under it in small print
+ * with or without the heading before it.
+ */
+export type NarrowPlace = 'head' | 'side' | 'note' | 'labelled';
+/** `header` must be words: on a narrow screen it may stand before the cell. */
+export type TableColumn<T extends RowData> = ColumnDef<typeof features, T> & { header: string; narrow?: NarrowPlace };
 export type Sorting = SortingState;
 
 interface DataTableProps<T extends RowData> {
@@ -94,13 +99,17 @@ export function DataTable<T extends RowData>(props: DataTableProps<T>) {
       </thead>
       <tbody role="rowgroup" className="max-tablet:block">
         {table.getRowModel().rows.map((row) => (
-          <tr key={row.id} role="row" className="border-b border-rule align-top max-tablet:block max-tablet:py-2">
+          <tr
+            key={row.id}
+            role="row"
+            className="border-b border-rule align-top max-tablet:grid max-tablet:grid-cols-[minmax(0,1fr)_auto] max-tablet:gap-x-4 max-tablet:py-3"
+          >
             {row.getAllCells().map((cell) => (
               <td
                 key={cell.id}
                 role="cell"
                 data-label={(cell.column.columnDef as TableColumn<T>).header}
-                className="labelled py-2 pr-4 last:pr-0 max-tablet:grid max-tablet:grid-cols-[8rem_minmax(0,1fr)] max-tablet:gap-2 max-tablet:py-1 max-tablet:pr-0"
+                className={`py-2 pr-4 last:pr-0 max-tablet:p-0 ${narrowLooks[(cell.column.columnDef as TableColumn<T>).narrow ?? 'labelled']}`}
               >
                 <div className="min-w-0">
                   <table.FlexRender cell={cell} />
@@ -114,6 +123,19 @@ export function DataTable<T extends RowData>(props: DataTableProps<T>) {
     // biome-ignore-end lint/a11y/useSemanticElements: see above
     // biome-ignore-end lint/a11y/noRedundantRoles: see above
   );
+}
+
+const narrowLooks: Record<NarrowPlace, string> = {
+  head: 'max-tablet:col-start-1',
+  side: 'max-tablet:col-start-2 max-tablet:max-w-48 max-tablet:text-right',
+  note: 'max-tablet:col-span-2 max-tablet:text-note max-tablet:text-ink-2 max-tablet:has-[.not-noted]:hidden',
+  labelled:
+    'labelled max-tablet:col-span-2 max-tablet:grid max-tablet:grid-cols-[7rem_minmax(0,1fr)] max-tablet:gap-2 max-tablet:text-note max-tablet:has-[.not-noted]:hidden',
+};
+
+/** Stands in a cell for what nobody noted; on a narrow screen the whole line is left out. */
+export function NotNoted({ words = 'not noted' }: { words?: string }) {
+  return <span className="not-noted text-ink-2">{words}</span>;
 }
 
 function ariaSort<T extends RowData>(column: Column<typeof features, T>) {

@@ -1,0 +1,10 @@
+import type { Role, Scope } from '@tiltwright/shared/schemas/account.ts';
+
+/** Who is asking. */
+export type Actor =
+  | { kind: 'visitor'; hadSession: boolean }
+  | { kind: 'person'; userId: string; roles: readonly Role[] }
+  | { kind: 'key'; keyId: string; userId: string; roles: readonly Role[]; scopes: readonly Scope[] };
+
+/** The id history and audit keep: opaque, it survives the person's leaving. */
+export const actorId = (actor: Actor) => (actor.kind === 'visitor' ? 'visitor' : actor.userId);

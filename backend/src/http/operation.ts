@@ -1,0 +1,62 @@
+// An operation is described once: its address, who may use it, what it takes and gives.
+// Express routes, validation, 405 answers and the OpenAPI document all come from the same description.
+import type { ProblemCode } from '@tiltwright/shared/schemas/problem.ts';
+import type { Request, Response } from 'express';
+import type * as z from 'zod';
+import type { Actor } from '../auth/actor.ts';
+import type { Permission } from '../auth/may.ts';
+
+export type Method = 'get' | 'post' | 'put' | 'patch' | 'delete';
+type Fields = z.ZodObject;
+
+export interface Operation<P extends Fields = Fields, Q extends Fields = Fields, B extends z.ZodType = z.ZodType> {
+  /** operationId; also the name of the client's method. */
+  id: string;
+  method: Method;
+  /** Below /api/v1, parameters in braces. */
+  path: string;
+  tag: string;
+  summary: string;
+  description?: string;
+  may: Permission;
+  params?: P;
+  query?: Q;
+  body?: B;
+  /** Set where the body is a form with a file. */
+  multipart?: z.ZodObject;
+  bodyExample?: unknown;
+  reply: { status: 200 | 201 | 202 | 204; description: string; schema?: z.ZodType; contentType?: string };
+  /** Beyond those every operation can answer with. */
+  problems?: readonly ProblemCode[];
+  /** Cache-Control of a good answer; private answers say no-store. */
+  cache: string;
+}
+
+type Output<S, Empty> = S extends z.ZodType ? z.output<S> : Empty;
+
+export interface Call<P, Q, B> {
+  params: Output<P, Record<string, never>>;
+  query: Output<Q, Record<string, never>>;
+  body: Output<B, undefined>;
+  actor: Actor;
+  req: Request;
+  res: Response;
+}
+
+export interface Route {
+  operation: Operation;
+  // biome-ignore lint/suspicious/noExplicitAny: the types meet in route(), where P, Q and B are known
+  handle: (call: Call<any, any, any>) => unknown;
+}
+
+/** Ties a handler to its description; what it returns is the JSON answer, `undefined` when it answered itself. */
+export function route<P extends Fields, Q extends Fields, B extends z.ZodType>(
+  operation: Operation<P, Q, B>,
+  handle: (call: Call<P, Q, B>) => unknown,
+): Route {
+  return { operation: operation as unknown as Operation, handle };
+}
+
+export const noStore = 'no-store';
+/** The catalog changes only by editions: keep, but ask again each time. */
+export const revalidate = 'no-cache';

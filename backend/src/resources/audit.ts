@@ -1,0 +1,26 @@
+import type { Db } from '../db/connect.ts';
+import { auditLog } from '../db/schema/people.ts';
+
+export type AuditAction =
+  | 'session.begin'
+  | 'session.refused'
+  | 'session.end'
+  | 'account.create'
+  | 'key.create'
+  | 'key.revoke'
+  | 'import.upload'
+  | 'import.discard'
+  | 'edition.publish';
+
+type Writer = Pick<Db, 'insert'>;
+
+/** Adds to the log that nothing leaves; inside a transaction, it stands or falls with it. */
+export function audit(
+  db: Writer,
+  actor: string | null,
+  action: AuditAction,
+  subject: string | null,
+  detail: Record<string, unknown> = {},
+): void {
+  db.insert(auditLog).values({ at: new Date().toISOString(), actor, action, subject, detail }).run();
+}

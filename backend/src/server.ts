@@ -1,0 +1,80 @@
+import type { Server } from 'node:http';
+import type { AddressInfo } from 'node:net';
+import Database from 'better-sqlite3';
+import { pino } from 'pino';
+import { createApp } from './app.ts';
+import { type Config, readConfig } from './config.ts';
+import { connect, type Db, databaseFile } from './db/connect.ts';
+import { migrateDatabase } from './db/migrate.ts';
+import { demoAccounts, demoPassword, seedDemoWorld } from './db/seed.ts';
+import { migrationsFolder, seedsFolder } from './paths.ts';
+import { recoverImports } from './resources/imports/recover-imports.ts';
+import { catalogSearch } from './resources/search/search-catalog.ts';
+import { StartProblem } from './start-problem.ts';
+
+/** Open requests get this long to end when the server is told to stop. */
+const patienceMs = 5000;
+
+async function start(): Promise<void> {
+  const config = readConfig(process.env);
+  const db = openDatabase(config);
+  if (config.mode !== 'production') await seedDemoWorld(db, config, seedsFolder);
+  recoverImports(db);
+  const app = createApp({ db, config, search: catalogSearch(db) }, pino({ level: config.logLevel }));
+  const server = await listen(app.listen.bind(app), config);
+  stopOnSignal(server, db);
+  greet(config, (server.address() as AddressInfo).port);
+}
+
+function openDatabase(config: Config): Db {
+  try {
+    const db = connect(databaseFile(config.dataFolder));
+    migrateDatabase(db, migrationsFolder);
+    return db;
+  } catch (error) {
+    if (error instanceof Database.SqliteError)
+      throw new StartProblem(`The database in ${config.dataFolder} cannot be opened: ${error.message}.`);
+    throw error;
+  }
+}
+
+function listen(open: (port: number, host: string, done: (error?: Error) => void) => Server, config: Config): Promise<Server> {
+  return new Promise((resolve, reject) => {
+    const server = open(config.port, config.host, (error) => {
+      if (!error) return resolve(server);
+      const { code } = error as NodeJS.ErrnoException;
+      const reason =
+        code === 'EADDRINUSE'
+          ? `Port ${config.port} is taken by another program`
+          : `The server cannot listen on ${config.host}:${config.port} (${code})`;
+      reject(new StartProblem(`${reason}; choose another with PORT.`));
+    });
+  });
+}
+
+function stopOnSignal(server: Server, db: Db): void {
+  const stop = () => {
+    server.close(() => {
+      db.$client.close();
+      process.exit(0);
+    });
+    server.closeIdleConnections();
+    setTimeout(() => server.closeAllConnections(), patienceMs).unref();
+  };
+  process.once('SIGTERM', stop);
+  process.once('SIGINT', stop);
+}
+
+function greet(config: Config, port: number): void {
+  const host = config.host.includes(':') ? `[${config.host}]` : config.host;
+  const lines = [`Tiltwright is ready on http://${host}:${port}`, `API: http://${host}:${port}/api/docs`];
+  if (config.mode !== 'production')
+    lines.push('Demo accounts (password for all: ' + demoPassword + '):', ...demoAccounts.map(({ email }) => `  ${email}`));
+  process.stdout.write(`${lines.join('\n')}\n`);
+}
+
+start().catch((error: unknown) => {
+  if (error instanceof StartProblem) process.stderr.write(`${error.message}\n`);
+  else process.stderr.write(`Tiltwright could not start: ${error instanceof Error ? error.stack : String(error)}\n`);
+  process.exit(1);
+});
