@@ -28,7 +28,7 @@ export default function Hull() {
     >
       {(sheet) => (
         <Section title="Running trim">
-          <RunningTrim hull={sheet.id} />
+          <RunningTrim hull={sheet} />
         </Section>
       )}
     </PartSheet>

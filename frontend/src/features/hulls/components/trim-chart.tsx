@@ -4,15 +4,7 @@ import { useMeasuredWidth } from '../../../drawings/use-measured-width.ts';
 import { formatNumber, formatQuantity, formatShort, toShown, unitWord } from '../../../lib/format-units.ts';
 import { useUnits } from '../../../lib/unit-choice.ts';
 import { axisTicks } from '../axis-ticks.ts';
-
-/** The curve at one speed, as the engine works it out. */
-export interface CurvePlace {
-  speedKn: number;
-  valueDeg: number;
-  sigmaDeg: number;
-  /** True where no measurement bears on it. */
-  estimated: boolean;
-}
+import type { CurvePlace } from '../trim-curve.ts';
 
 interface TrimChartProps {
   points: readonly TrimPoint[];
