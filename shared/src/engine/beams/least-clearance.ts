@@ -1,11 +1,12 @@
 // How close an unblocked beam passes to the nearest part, and how close is too close for sound.
-import type { Pose } from '../frames.ts';
+import { type Pose, toBoat } from '../frames.ts';
+import { rotate } from '../rotation.ts';
 import type { SideElement } from '../sensor.ts';
 import { boundingRadiusM, distanceToSolid, type Solid } from '../solids/solid.ts';
 import { marginRangeM, reachM } from '../thresholds.ts';
 import type { Vec3 } from '../vec3.ts';
 import type { Fan, Side } from './fan.ts';
-import { cellOrigins, rayDirection } from './slab.ts';
+import { apertureCells, cellOffsetM, rayDirection } from './slab.ts';
 
 export interface NearestPass {
   /** Smallest distance of a ray to any solid but the hull, m. */
@@ -23,7 +24,7 @@ export function diffractionMarginM(wavelengthM: number, alongM: number, rangeM =
 /** The closest pass of a slab's rays to any solid but the hull within 5 m; null where nothing is near enough to be reached. */
 export function nearestPass(solids: readonly Solid[], sensor: Pose, element: SideElement, fan: Fan, side: Side): NearestPass | null {
   const half = element.alongTrackWidthRad / 2;
-  const origins = cellOrigins(sensor, element.apertureM);
+  const origins = Array.from({ length: apertureCells }, (_, cell) => toBoat(sensor, [cellOffsetM(cell, element.apertureM), 0, 0]));
   let best: NearestPass | null = null;
   let limit = reachM;
   for (const solid of solids) {
@@ -31,7 +32,7 @@ export function nearestPass(solids: readonly Solid[], sensor: Pose, element: Sid
     const radius = boundingRadiusM(solid.shape);
     for (const depression of fan.depressionsRad) {
       for (let way = -1; way <= 1; way++) {
-        const direction = rayDirection(sensor, side, depression, way * half);
+        const direction = rotate(sensor.rotation, rayDirection(side, depression, way * half));
         for (const origin of origins) {
           if (distanceToSegment(solid.pose.originM, origin, direction) - radius >= limit) continue;
           const pass = passOf(solid, origin, direction);

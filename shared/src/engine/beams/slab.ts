@@ -1,14 +1,21 @@
 // One side's fan cast as a slab: close to the face the beam is as wide as the aperture, so rays start all along it.
+// Rays of one direction are parallel, so each convex solid takes an unbroken run of them: runs are kept as bits, one a cell.
 import type { Pose } from '../frames.ts';
-import { rotate } from '../rotation.ts';
 import type { SideElement } from '../sensor.ts';
-import { boundingRadiusM, enterSolid, type Solid } from '../solids/solid.ts';
+import { enterShape, type Solid } from '../solids/solid.ts';
 import { reachM } from '../thresholds.ts';
 import type { Vec3 } from '../vec3.ts';
+import { depressionSpan, type Span } from './depression-span.ts';
 import type { Fan, Side } from './fan.ts';
+import { capsuleShadow, discShadow, strutShadow } from './round-shadow.ts';
+import { type SeenSolid, seenBy } from './seen-solid.ts';
+import { boxShadow, emptyShadow, prismShadow, type RayFamily, type Shadow } from './shadow.ts';
 
-/** Equal cells of the aperture; a ray starts at the middle of each. */
+/** Equal cells of the aperture; a ray starts at the middle of each. At most 30, to fit in the bits of a number. */
 export const apertureCells = 17;
+const ways = 3;
+const raysADirection = apertureCells * ways;
+const allCells = 2 ** apertureCells - 1;
 
 /** What is blocked, direction by direction, in the order of the fan's depressions. */
 export interface SlabProfile {
@@ -18,20 +25,16 @@ export interface SlabProfile {
   bySolid: (Float64Array | null)[];
 }
 
-/** Where the rays of a slab start, boat frame, m. */
-export function cellOrigins(sensor: Pose, apertureM: number): Vec3[] {
-  const along = rotate(sensor.rotation, [1, 0, 0]);
-  return Array.from({ length: apertureCells }, (_, cell) => {
-    const s = ((cell + 0.5) / apertureCells - 0.5) * apertureM;
-    return [sensor.originM[0] + s * along[0], sensor.originM[1] + s * along[1], sensor.originM[2] + s * along[2]] as Vec3;
-  });
+/** Where the rays of a slab start along the sensor's x axis, m from the face centre. */
+export function cellOffsetM(cell: number, apertureM: number): number {
+  return ((cell + 0.5) / apertureCells - 0.5) * apertureM;
 }
 
-/** A ray's direction in the boat frame: depression from the sensor's level, along-track angle forward positive. Unit length. */
-export function rayDirection(sensor: Pose, side: Side, depressionRad: number, alongRad: number): Vec3 {
+/** A ray's direction in the sensor frame: depression from its level, along-track angle forward positive. Unit length. */
+export function rayDirection(side: Side, depressionRad: number, alongRad: number): Vec3 {
   const c = Math.cos(alongRad);
   const outward = Math.cos(depressionRad) * c;
-  return rotate(sensor.rotation, [Math.sin(alongRad), side === 'starboard' ? outward : -outward, Math.sin(depressionRad) * c]);
+  return [Math.sin(alongRad), side === 'starboard' ? outward : -outward, Math.sin(depressionRad) * c];
 }
 
 /**
@@ -39,38 +42,116 @@ export function rayDirection(sensor: Pose, side: Side, depressionRad: number, al
  * A ray keeps Π(1 − opacity) of the solids it meets within 5 m; each direction averages cells × {−h/2, 0, +h/2}.
  */
 export function castSlab(solids: readonly Solid[], sensor: Pose, element: SideElement, fan: Fan, side: Side): SlabProfile {
-  const origins = cellOrigins(sensor, element.apertureM);
-  const half = element.alongTrackWidthRad / 2;
   const steps = fan.depressionsRad.length;
+  const opaque = new Int32Array(steps * ways);
+  const veils: { opacity: number; cells: Int32Array }[] = [];
+  const bySolid = solids.map((solid) => {
+    const seen = seenBy(sensor, solid);
+    const span = depressionSpan(seen, side, fan, element);
+    if (!span) return null;
+    const cells = solid.opacity >= 1 ? opaque : new Int32Array(steps * ways);
+    const own = castSolid(seen, span, element, fan, side, cells);
+    if (own && cells !== opaque) veils.push({ opacity: solid.opacity, cells });
+    return own;
+  });
   const blocked = new Float64Array(steps);
-  const bySolid: (Float64Array | null)[] = solids.map(() => null);
-  const radii = solids.map(({ shape }) => boundingRadiusM(shape));
-  const share = 1 / (origins.length * 3);
-  for (let step = 0; step < steps; step++) {
-    for (let way = -1; way <= 1; way++) {
-      const direction = rayDirection(sensor, side, fan.depressionsRad[step] as number, way * half);
-      for (const origin of origins) {
-        let kept = 1;
-        for (let k = 0; k < solids.length; k++) {
-          const solid = solids[k] as Solid;
-          if (missesSphere(solid.pose.originM, radii[k] as number, origin, direction)) continue;
-          if (enterSolid(solid, origin, direction) > reachM) continue;
-          kept *= 1 - solid.opacity;
-          const own = bySolid[k] ?? new Float64Array(steps);
-          bySolid[k] = own;
-          own[step] = (own[step] as number) + solid.opacity * share;
-        }
-        blocked[step] = (blocked[step] as number) + (1 - kept) * share;
-      }
-    }
+  for (let i = 0; i < opaque.length; i++) {
+    const hidden = opaque[i] as number;
+    const step = (i / ways) | 0;
+    blocked[step] = (blocked[step] as number) + (bitCount(hidden) + veiled(veils, i, allCells & ~hidden)) / raysADirection;
   }
   return { blocked, bySolid };
 }
 
-function missesSphere(centre: Vec3, radiusM: number, origin: Vec3, direction: Vec3): boolean {
-  const x = centre[0] - origin[0];
-  const y = centre[1] - origin[1];
-  const z = centre[2] - origin[2];
-  const along = x * direction[0] + y * direction[1] + z * direction[2];
-  return x * x + y * y + z * z - along * along > radiusM * radiusM;
+/** Marks the cells one solid takes and counts them, each weighed by its opacity; null where it takes none. */
+function castSolid(seen: SeenSolid, span: Span, element: SideElement, fan: Fan, side: Side, cells: Int32Array): Float64Array | null {
+  const { solid, turn, face } = seen;
+  const half = element.alongTrackWidthRad / 2;
+  const shadow = emptyShadow();
+  const family: RayFamily = { ox: face[0], oy: face[1], oz: face[2], ex: turn[0], ey: turn[3], ez: turn[6], dx: 0, dy: 0, dz: 0, reachM };
+  const cellM = element.apertureM / apertureCells;
+  const middle = (apertureCells - 1) / 2;
+  let own: Float64Array | null = null;
+  for (let step = span.first; step <= span.last; step++) {
+    const depression = fan.depressionsRad[step] as number;
+    const cos = side === 'starboard' ? Math.cos(depression) : -Math.cos(depression);
+    const sin = Math.sin(depression);
+    for (let way = 0; way < ways; way++) {
+      const x = Math.sin((way - 1) * half);
+      const c = way === 1 ? 1 : Math.cos(half);
+      const y = cos * c;
+      const z = sin * c;
+      family.dx = turn[0] * x + turn[1] * y + turn[2] * z;
+      family.dy = turn[3] * x + turn[4] * y + turn[5] * z;
+      family.dz = turn[6] * x + turn[7] * y + turn[8] * z;
+      shadowOf(solid, family, shadow);
+      const from = Math.max(0, Math.ceil(shadow.low / cellM + middle));
+      const to = Math.min(apertureCells - 1, Math.floor(shadow.high / cellM + middle));
+      if (!(from <= to)) continue;
+      const run = (2 << to) - (1 << from);
+      const taken = shadow.lowExact && shadow.highExact ? run : testCells(solid, family, from, to, element.apertureM);
+      if (taken === 0) continue;
+      const at = step * ways + way;
+      cells[at] = (cells[at] as number) | taken;
+      own ??= new Float64Array(fan.depressionsRad.length);
+      own[step] = (own[step] as number) + (solid.opacity * bitCount(taken)) / raysADirection;
+    }
+  }
+  return own;
+}
+
+function shadowOf({ shape }: Solid, family: RayFamily, shadow: Shadow): void {
+  switch (shape.kind) {
+    case 'box':
+      return boxShadow(shape, family, shadow);
+    case 'capsule':
+      return capsuleShadow(shape, family, shadow);
+    case 'elliptic-strut':
+      return strutShadow(shape, family, shadow);
+    case 'prop-disc':
+      return discShadow(shape, family, shadow);
+    case 'prism':
+      return prismShadow(shape.planes, family, shadow);
+    default:
+      return shape satisfies never;
+  }
+}
+
+/** Ray by ray, where the run's ends are not certain. */
+function testCells({ shape }: Solid, f: RayFamily, from: number, to: number, apertureM: number): number {
+  let taken = 0;
+  for (let cell = from; cell <= to; cell++) {
+    const s = cellOffsetM(cell, apertureM);
+    if (enterShape(shape, f.ox + s * f.ex, f.oy + s * f.ey, f.oz + s * f.ez, f.dx, f.dy, f.dz) <= reachM) taken |= 1 << cell;
+  }
+  return taken;
+}
+
+/** Rays lost to what lets some through, among the cells still open. */
+function veiled(veils: readonly { opacity: number; cells: Int32Array }[], at: number, open: number): number {
+  let lost = 0;
+  let touched = 0;
+  let several = 0;
+  for (const { opacity, cells } of veils) {
+    const own = (cells[at] as number) & open;
+    several |= touched & own;
+    touched |= own;
+    lost += opacity * bitCount(own);
+  }
+  if (several === 0) return lost;
+  lost = 0;
+  for (let cell = 0; cell < apertureCells; cell++) {
+    const bit = 1 << cell;
+    if ((open & bit) === 0) continue;
+    let kept = 1;
+    for (const { opacity, cells } of veils) if (((cells[at] as number) & bit) !== 0) kept *= 1 - opacity;
+    lost += 1 - kept;
+  }
+  return lost;
+}
+
+function bitCount(bits: number): number {
+  let n = bits - ((bits >> 1) & 0x55555555);
+  n = (n & 0x33333333) + ((n >> 2) & 0x33333333);
+  return (((n + (n >> 4)) & 0x0f0f0f0f) * 0x01010101) >> 24;
 }

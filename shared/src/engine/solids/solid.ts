@@ -40,6 +40,11 @@ export function enterSolid({ shape, pose }: Solid, origin: Vec3, direction: Vec3
   const dx = a * u + d * v + g * w;
   const dy = b * u + e * v + h * w;
   const dz = c * u + f * v + i * w;
+  return enterShape(shape, ox, oy, oz, dx, dy, dz);
+}
+
+/** The same with origin and direction in the shape's own axes. */
+export function enterShape(shape: Shape, ox: number, oy: number, oz: number, dx: number, dy: number, dz: number): number {
   switch (shape.kind) {
     case 'box':
       return enterBox(shape, ox, oy, oz, dx, dy, dz);
