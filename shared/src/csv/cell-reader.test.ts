@@ -103,6 +103,18 @@ describe('any cell', () => {
     );
   });
 
+  it('is refused or read at once, however long it is', () => {
+    for (const unit of ['1', ' ', '1 ', "1'", '- ', '2015-', 'a|', '(', '420:', 'é', '="']) {
+      const text = `1${unit.repeat(200_000 / unit.length)}x`;
+      for (const column of columnsOf('hulls')) {
+        const from = performance.now();
+        readCell(text, column);
+        // The mark is wide: what has to be told apart is a few milliseconds from the minutes of a pattern that backtracks.
+        expect(performance.now() - from, `${column.column} ${unit}`).toBeLessThan(500);
+      }
+    }
+  });
+
   it('offers only readings that it would take', () => {
     for (const { table, column: name, text, options } of all) {
       const column = findColumn(table, name);

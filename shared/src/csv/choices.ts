@@ -113,7 +113,7 @@ export function choiceReader(field: string, values: readonly string[]): ChoiceRe
   }
   // A choice's own name wins over any spelling of another.
   for (const value of values) known.set(fold(value), value);
-  const ambiguous = ambiguousByField[field] ?? {};
+  const ambiguous = new Map(Object.entries(ambiguousByField[field] ?? {}));
 
   return (tidied) => {
     const exact = known.get(tidied);
@@ -124,7 +124,7 @@ export function choiceReader(field: string, values: readonly string[]): ChoiceRe
     if (field === 'drive' && withoutLowerUnit.has(word)) {
       return refused('refused-drive', `${quoted(tidied)}: nothing to clear: jet and shaft drives have no lower unit here.`);
     }
-    const several = ambiguous[word];
+    const several = ambiguous.get(word);
     if (several) return refused('ambiguous-choice', `${quoted(tidied)} could mean ${several.join(', ')}.`, several);
     const alike = values.filter((v) => word.length >= 3 && (fold(v).startsWith(word.slice(0, 3)) || fold(v).includes(word)));
     return refused('unknown-choice', `${quoted(tidied)} is none of ${values.join(', ')}.`, alike);

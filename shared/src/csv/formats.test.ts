@@ -201,6 +201,17 @@ describe('a table', () => {
     expect(table(text, { table: 'hulls' }).decimalComma).toBe(comma);
   });
 
+  it('is not held up by cells of a hundred thousand characters where a header or units should stand', () => {
+    const from = performance.now();
+    for (const unit of ['(', ' ', 'a ', '( ']) {
+      const long = unit.repeat(100_000 / unit.length);
+      expect(problem(`${long}x,${long}y\n1,2\n`, { parse: parseNode }).problem).toBe('no-header');
+      expect(table(`maker,model\n${long}x,${long}y\n`, { table: 'hulls', parse: parseNode }).rows).toHaveLength(1);
+    }
+    // Well under a second; a pattern that backtracks over these takes minutes.
+    expect(performance.now() - from).toBeLessThan(4000);
+  });
+
   it('recognises a spreadsheet named .csv', () => {
     expect(problem(bytes(0x50, 0x4b, 0x03, 0x04, 0, 0)).problem).toBe('binary-file');
   });

@@ -164,6 +164,9 @@ function findRepeated(header: readonly string[], row: number): TableProblem | un
   return undefined;
 }
 
+/** The longest unit anyone spells out, in brackets. */
+const longestUnit = 20;
+
 /** A row of nothing but units below the header; one that contradicts a canonical header is a problem. */
 function readUnitRow(
   header: readonly string[],
@@ -171,7 +174,8 @@ function readUnitRow(
   row: number,
   table?: Table,
 ): string[] | TableProblem | undefined {
-  const words = record?.map((cell) => tidy(cell).replace(/^[([]\s*(.*?)\s*[)\]]$/, '$1')) ?? [];
+  if (!record || record.some((cell) => cell.length > longestUnit)) return undefined;
+  const words = record.map((cell) => tidy(cell).replace(/^[([]\s*(.*?)\s*[)\]]$/, '$1'));
   const stated = words.filter((word) => word !== '' && !/^[-–—]+$/.test(word));
   if (stated.length === 0 || !stated.every((word) => unitOfWord(word) !== undefined)) return undefined;
   for (const [at, word] of words.entries()) {

@@ -7,8 +7,12 @@ import { type CellUnit, unitOfWord } from './units.ts';
 /** One column of model years, 2015-18, in place of year_from and year_to. */
 export const yearsColumn = 'years';
 
+/** Longer cells are no names of columns, and not worth a closer look. */
+const longestHeader = 120;
+
 /** The canonical name a header is, its case and its spaces or hyphens for underscores aside; undefined for an own header. */
 export function canonicalName(table: Table, header: string): string | undefined {
+  if (header.length > longestHeader) return undefined;
   const name = tidy(header)
     .toLowerCase()
     .replace(/[\s-]+/g, '_');
@@ -138,6 +142,7 @@ function setFirst(names: Map<string, string>, words: string, column: string): vo
 
 /** The column an own header most likely is, with the unit it states; to be offered in the mapping, never assumed. */
 export function likelyColumn(table: Table, header: string): LikelyColumn | undefined {
+  if (header.length > longestHeader) return undefined;
   const names = namesOf(table);
   const { words, unit } = splitHeaderUnit(header);
   const column = names.get(words) ?? names.get(plainWords(tidy(header)));

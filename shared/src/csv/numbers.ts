@@ -18,6 +18,8 @@ function ownUnit(column: Column): CellUnit {
   return column.unit && column.unit !== 'year' ? column.unit : '1';
 }
 
+/** Nobody writes one value longer, twice in two units included. */
+const longestNumber = 80;
 const plainNumber = /^-?\d{1,9}(?:\.\d{1,9})?$/;
 
 /**
@@ -53,6 +55,7 @@ export function numberReader(column: Column, options: NumberOptions = {}): Numbe
   const read = (text: string) => readQuantity(text, dimension, unit, bareUnit, decimalComma);
 
   return (tidied) => {
+    if (tidied.length > longestNumber) return refused('not-a-number', `${quoted(tidied)} does not read as a number.`);
     const text = plainMarks(tidied);
     const found = readOrExplain(text, read);
     if (!found.ok) return found;

@@ -115,7 +115,7 @@ class Scanner {
     if (word === undefined) return undefined;
     if (this.dimension === 'angle' && before === 'deg' && word === "'") return 'arcmin';
     if (this.dimension === 'angle' && before === 'arcmin' && word === '"') return 'arcsec';
-    const ambiguous = ambiguousUnits[word.toLowerCase().replace(/\.$/, '')];
+    const ambiguous = ambiguousUnits.get(word.toLowerCase().replace(/\.$/, ''));
     if (ambiguous) return refused('ambiguous-unit', `${quoted(word)} could mean ${ambiguous.join(', ')}.`, ambiguous);
     const unit = unitOfWord(word);
     if (!unit) return refused('unknown-unit', `${quoted(word)} is not a unit known here.`);

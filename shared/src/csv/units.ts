@@ -114,12 +114,13 @@ export function unitOfWord(word: string): CellUnit | undefined {
   return bySpelling.get(plain === '\u2032' ? "'" : plain === '\u2033' ? '"' : plain);
 }
 
+const tons = ['1000 kg (tonne)', '2000 lb (short ton)', '2240 lb (long ton)'];
 /** Words that mean different units to different people, with what they could mean. */
-export const ambiguousUnits: Readonly<Record<string, readonly string[]>> = {
-  ton: ['1000 kg (tonne)', '2000 lb (short ton)', '2240 lb (long ton)'],
-  tons: ['1000 kg (tonne)', '2000 lb (short ton)', '2240 lb (long ton)'],
-  cwt: ['100 lb (short hundredweight)', '112 lb (long hundredweight)'],
-};
+export const ambiguousUnits: ReadonlyMap<string, readonly string[]> = new Map([
+  ['ton', tons],
+  ['tons', tons],
+  ['cwt', ['100 lb (short hundredweight)', '112 lb (long hundredweight)']],
+]);
 
 const dimensionOfField: Readonly<Record<Unit, Dimension>> = {
   m: 'length',

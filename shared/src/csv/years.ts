@@ -20,12 +20,15 @@ const since = /^(?:since|from)\s+(\d{4})$/i;
 const upTo = /^(?:(?:up\s+to|until|to)\s+|[-\u2010-\u2015\u2212]\s*)(\d{4})$/i;
 const twoDigits = new RegExp(`^'?(\\d{2})(?:${dash}'?(\\d{2}))?$`);
 
+const longestYears = 40;
+
 /**
  * Reads model years. A single year is its own first and last.
  * Two figures after the dash are a year of the same century when they are later than the first year's; else they could be a month.
  */
 export function readYears(text: string): YearsResult {
   const t = text.trim().replace(/\u2019/g, "'");
+  if (t.length > longestYears) return refused('bad-years', `${quoted(t)} does not read as model years such as 2015, 2015-18 or 2019+.`);
   const single = one.exec(t);
   if (single) return inRange(Number(single[1]), Number(single[1]), t);
   const pair = full.exec(t);
