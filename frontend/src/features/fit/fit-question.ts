@@ -1,24 +1,33 @@
 // From the page's state to the question the API answers.
-import type { FitQuestionInput } from '@tiltwright/shared/schemas/fit.ts';
+import type { FitQuestion } from '@tiltwright/shared/schemas/fit.ts';
+import type { InlineHull } from '@tiltwright/shared/schemas/hull.ts';
+import type { InlineLowerUnit } from '@tiltwright/shared/schemas/lower-unit.ts';
+import type { InlineTransducer } from '@tiltwright/shared/schemas/transducer.ts';
 import { type FitState, standardState } from './fit-state.ts';
 
 export const cruisingLabel = 'cruising';
 
 /** The question for this state; what is not known is left out, so that class values stand in and are listed as assumed. */
-export function fitQuestionOf(state: FitState): FitQuestionInput {
+export function fitQuestionOf(state: FitState): FitQuestion {
   const { offsetMm, dropMm, boardMm } = state;
   return {
-    hull: state.hull ?? {
-      form: state.form,
-      lengthM: state.lengthM,
-      ...known('deadriseDeg', state.deadriseDeg),
-      ...known('transomAngleDeg', state.transomAngleDeg),
-      ...known('transomHeightMm', state.transomHeightMm),
-    },
-    lowerUnits: motorOffsetsMm(state).map((offset) => ({ lowerUnit: lowerUnitOf(state), offsetMm: offset, ...motorPose(state) })),
-    transducer: state.sensor ?? { kinds: ['side'], housingLengthMm: state.housingLengthMm },
+    hull: state.hull ?? describedHull(state),
+    lowerUnits: motorOffsetsMm(state).map((offset) => ({
+      lowerUnit: state.motor ?? describedMotor(state),
+      offsetMm: offset,
+      ...motorPose(state),
+    })),
+    transducer: state.sensor ?? describedSensor(state),
     ...(state.mount !== null && { mount: state.mount }),
-    placement: { offsetMm, dropMm, boardMm, ...known('standoffMm', state.standoffMm), ...known('tiltDeg', state.tiltDeg) },
+    placement: {
+      offsetMm,
+      dropMm,
+      boardMm,
+      rollDeg: 0,
+      yawDeg: 0,
+      ...known('standoffMm', state.standoffMm),
+      ...known('tiltDeg', state.tiltDeg),
+    },
     running: {
       speedKn: state.scanKn,
       water: state.water,
@@ -45,8 +54,23 @@ export function motorName(state: Pick<FitState, 'motors'>, unit: number): string
   return unit === 0 ? 'port motor' : 'starboard motor';
 }
 
-function lowerUnitOf(state: FitState) {
-  return state.motor ?? { drive: 'outboard' as const, powerHp: state.powerHp, ...known('shaftLengthMm', state.shaftLengthMm) };
+/** The boat as the page describes it where none is chosen from the catalog. */
+export function describedHull(state: FitState): InlineHull {
+  return {
+    form: state.form,
+    lengthM: state.lengthM,
+    ...known('deadriseDeg', state.deadriseDeg),
+    ...known('transomAngleDeg', state.transomAngleDeg),
+    ...known('transomHeightMm', state.transomHeightMm),
+  };
+}
+
+export function describedMotor(state: FitState): InlineLowerUnit {
+  return { drive: 'outboard', powerHp: state.powerHp, ...known('shaftLengthMm', state.shaftLengthMm) };
+}
+
+export function describedSensor(state: FitState): InlineTransducer {
+  return { kinds: ['side'], housingLengthMm: state.housingLengthMm };
 }
 
 function motorPose({ motorTrimDeg, steerDeg, setbackMm, raiseMm }: FitState) {

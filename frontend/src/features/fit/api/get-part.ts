@@ -1,0 +1,23 @@
+import { queryOptions, skipToken, useQuery } from '@tanstack/react-query';
+import { api, bodyOf } from '../../../lib/api-client.ts';
+
+const parts = {
+  hull: (id: string, signal: AbortSignal) => bodyOf(api.GET('/hulls/{id}', { params: { path: { id } }, signal })),
+  motor: (id: string, signal: AbortSignal) => bodyOf(api.GET('/lower-units/{id}', { params: { path: { id } }, signal })),
+  sensor: (id: string, signal: AbortSignal) => bodyOf(api.GET('/transducers/{id}', { params: { path: { id } }, signal })),
+  mount: (id: string, signal: AbortSignal) => bodyOf(api.GET('/mounts/{id}', { params: { path: { id } }, signal })),
+};
+type Parts = typeof parts;
+export type PartSheet<K extends keyof Parts> = Awaited<ReturnType<Parts[K]>>;
+
+export const partQuery = <K extends keyof Parts>(kind: K, id: string | null) =>
+  queryOptions({
+    queryKey: ['part', kind, id],
+    queryFn: id === null ? skipToken : ({ signal }) => parts[kind](id, signal) as Promise<PartSheet<K>>,
+    staleTime: 5 * 60_000,
+  });
+
+/** The sheet of a chosen part; nothing is asked for where none is chosen. */
+export function usePart<K extends keyof Parts>(kind: K, id: string | null) {
+  return useQuery(partQuery(kind, id));
+}

@@ -1,0 +1,25 @@
+import { type ReactNode, useState } from 'react';
+
+interface InputSheetProps {
+  title: string;
+  /** What stands in it now, in a few words, read while it is closed. */
+  summary: string;
+  children: ReactNode;
+}
+
+/** Desk width and up: the inputs lie open beside the drawing. */
+const isDesk = () => typeof window.matchMedia === 'function' && window.matchMedia('(min-width: 64rem)').matches;
+
+/** A fold of inputs: closed on a phone, so that verdict and drawing come first; open on a desk. */
+export function InputSheet({ title, summary, children }: InputSheetProps) {
+  const [open, setOpen] = useState(isDesk);
+  return (
+    <details open={open} onToggle={(event) => setOpen(event.currentTarget.open)} className="border-b border-rule">
+      <summary className="flex min-h-14 list-none flex-wrap items-center justify-between gap-x-4 px-4 py-2 hover:bg-slate-wash desk:px-6 [&::-webkit-details-marker]:hidden">
+        <span className="font-strong">{title}</span>
+        <span className="text-note text-ink-2">{summary}</span>
+      </summary>
+      <div className="flex flex-col gap-4 px-4 pt-1 pb-6 desk:px-6">{children}</div>
+    </details>
+  );
+}
