@@ -27,8 +27,9 @@ function preloadFont(): Plugin {
 
 export default defineConfig({
   plugins: [react(), tailwindcss(), preloadFont()],
-  server: { host: '127.0.0.1', proxy: { '/api': apiOrigin } },
-  preview: { host: '127.0.0.1', proxy: { '/api': apiOrigin } },
+  // The Host header is kept, so that a write through the proxy still counts as coming from its own site.
+  server: { host: '127.0.0.1', proxy: { '/api': { target: apiOrigin, changeOrigin: false } } },
+  preview: { host: '127.0.0.1', proxy: { '/api': { target: apiOrigin, changeOrigin: false } } },
   build: {
     outDir: 'dist',
     emptyOutDir: true,
