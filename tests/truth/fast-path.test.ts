@@ -1,7 +1,9 @@
 // The engine's fast way of casting a slab against the plain one, ray by ray, on random boats.
 import { fanOf } from '@tiltwright/shared/engine/beams/fan.ts';
+import { nearestPass } from '@tiltwright/shared/engine/beams/least-clearance.ts';
 import { castSlab } from '@tiltwright/shared/engine/beams/slab.ts';
 import { describe, expect, it } from 'vitest';
+import { plainNearestPass } from '../support/plain-least-clearance.ts';
 import { castPlainSlab } from '../support/plain-slab.ts';
 import { betweenOf, randomScene, seededRandom } from '../support/random-scene.ts';
 
@@ -36,4 +38,27 @@ describe(`fast slab against plain slab, seed ${seed}`, () => {
     expect(hit).toBeGreaterThan(1000);
     expect(worst).toBeLessThanOrEqual(1e-9);
   }, 60_000);
+});
+
+describe(`least clearance against every ray, seed ${seed}`, () => {
+  it('agrees to a tenth of a millimetre wherever nothing is hit', () => {
+    const between = betweenOf(seededRandom(seed + 1));
+    let compared = 0;
+    let worst = 0;
+    while (compared < 24) {
+      const { solids, sensor, element } = randomScene(between);
+      if (solids.length > 7) continue;
+      const fan = fanOf(element);
+      for (const side of ['port', 'starboard'] as const) {
+        if (castSlab(solids, sensor, element, fan, side).blocked.some((blocked) => blocked > 0)) continue;
+        const fast = nearestPass(solids, sensor, element, fan, side);
+        const plain = plainNearestPass(solids, sensor, element, fan, side);
+        if (!fast || !plain) throw new Error('an engine a metre away must be within reach');
+        worst = Math.max(worst, Math.abs(fast.clearanceM - plain.clearanceM));
+        compared++;
+      }
+    }
+    console.log(`least clearance: ${compared} sides, worst difference ${(worst * 1000).toFixed(4)} mm`);
+    expect(worst).toBeLessThanOrEqual(1e-4);
+  }, 120_000);
 });

@@ -8,6 +8,8 @@ export type Side = 'port' | 'starboard';
 /** Depressions from the sensor's level, radians, in equal steps; the same for both sides. */
 export interface Fan {
   depressionsRad: Float64Array;
+  cosines: Float64Array;
+  sines: Float64Array;
   /** Two-way weight of each depression; they do not add up to 1. */
   weights: Float64Array;
   totalWeight: number;
@@ -36,5 +38,7 @@ export function fanOf(element: SideElement): Fan {
     weights[i] = weight;
     totalWeight += weight;
   }
-  return { depressionsRad, weights, totalWeight, stepRad: (to - from) / steps };
+  const cosines = depressionsRad.map(Math.cos);
+  const sines = depressionsRad.map(Math.sin);
+  return { depressionsRad, cosines, sines, weights, totalWeight, stepRad: (to - from) / steps };
 }

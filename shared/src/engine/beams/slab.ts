@@ -66,19 +66,19 @@ export function castSlab(solids: readonly Solid[], sensor: Pose, element: SideEl
 /** Marks the cells one solid takes and counts them, each weighed by its opacity; null where it takes none. */
 function castSolid(seen: SeenSolid, span: Span, element: SideElement, fan: Fan, side: Side, cells: Int32Array): Float64Array | null {
   const { solid, turn, face } = seen;
-  const half = element.alongTrackWidthRad / 2;
+  const sinAlong = Math.sin(element.alongTrackWidthRad / 2);
+  const cosAlong = Math.cos(element.alongTrackWidthRad / 2);
   const shadow = emptyShadow();
   const family: RayFamily = { ox: face[0], oy: face[1], oz: face[2], ex: turn[0], ey: turn[3], ez: turn[6], dx: 0, dy: 0, dz: 0, reachM };
   const cellM = element.apertureM / apertureCells;
   const middle = (apertureCells - 1) / 2;
   let own: Float64Array | null = null;
   for (let step = span.first; step <= span.last; step++) {
-    const depression = fan.depressionsRad[step] as number;
-    const cos = side === 'starboard' ? Math.cos(depression) : -Math.cos(depression);
-    const sin = Math.sin(depression);
+    const cos = side === 'starboard' ? (fan.cosines[step] as number) : -(fan.cosines[step] as number);
+    const sin = fan.sines[step] as number;
     for (let way = 0; way < ways; way++) {
-      const x = Math.sin((way - 1) * half);
-      const c = way === 1 ? 1 : Math.cos(half);
+      const x = (way - 1) * sinAlong;
+      const c = way === 1 ? 1 : cosAlong;
       const y = cos * c;
       const z = sin * c;
       family.dx = turn[0] * x + turn[1] * y + turn[2] * z;
@@ -103,17 +103,22 @@ function castSolid(seen: SeenSolid, span: Span, element: SideElement, fan: Fan, 
 function shadowOf({ shape }: Solid, family: RayFamily, shadow: Shadow): void {
   switch (shape.kind) {
     case 'box':
-      return boxShadow(shape, family, shadow);
+      boxShadow(shape, family, shadow);
+      break;
     case 'capsule':
-      return capsuleShadow(shape, family, shadow);
+      capsuleShadow(shape, family, shadow);
+      break;
     case 'elliptic-strut':
-      return strutShadow(shape, family, shadow);
+      strutShadow(shape, family, shadow);
+      break;
     case 'prop-disc':
-      return discShadow(shape, family, shadow);
+      discShadow(shape, family, shadow);
+      break;
     case 'prism':
-      return prismShadow(shape.planes, family, shadow);
+      prismShadow(shape.planes, family, shadow);
+      break;
     default:
-      return shape satisfies never;
+      shape satisfies never;
   }
 }
 

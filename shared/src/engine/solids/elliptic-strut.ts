@@ -40,31 +40,35 @@ export function enterEllipticStrut(strut: EllipticStrut, ox: number, oy: number,
 
 /** Distance of a point (own axes, m) to the strut; 0 inside. */
 export function distanceToEllipticStrut(strut: EllipticStrut, x: number, y: number, z: number): number {
-  const across = distanceToEllipse(strut.halfChordM, strut.halfThicknessM, Math.abs(x), Math.abs(y));
+  const grow = ellipseFoot(strut.halfChordM, strut.halfThicknessM, x, y);
   const along = Math.max(0, Math.abs(z) - strut.halfHeightM);
-  return Math.sqrt(across * across + along * along);
+  if (grow === 0) return along;
+  const a2 = strut.halfChordM * strut.halfChordM;
+  const b2 = strut.halfThicknessM * strut.halfThicknessM;
+  const ex = (x * grow) / (grow + a2);
+  const ey = (y * grow) / (grow + b2);
+  return Math.sqrt(ex * ex + ey * ey + along * along);
 }
 
 /**
- * Distance of a point in the first quadrant to a filled ellipse, m; 0 inside.
- * The foot of the normal solves (a x/(t+a²))² + (b y/(t+b²))² = 1, which falls steadily for t ≥ 0: Newton from t = 0 never
- * overshoots because the left side is convex (Hart 1994, Graphics Gems IV, p. 113).
+ * The nearest point of a filled ellipse to (x, y) is (a² x/(t + a²), b² y/(t + b²)); this is t, 0 inside.
+ * t solves (a x/(t + a²))² + (b y/(t + b²))² = 1, whose left side falls and is convex for t ≥ 0, so Newton from 0 never overshoots
+ * (Hart 1994, Graphics Gems IV, p. 113). Semi-axes a and b, metres.
  */
-function distanceToEllipse(a: number, b: number, x: number, y: number): number {
-  const u = x / a;
-  const v = y / b;
-  if (u * u + v * v <= 1) return 0;
+export function ellipseFoot(a: number, b: number, x: number, y: number): number {
+  const ax = (a * x) ** 2;
+  const by = (b * y) ** 2;
   let t = 0;
   for (let i = 0; i < 60; i++) {
-    const p = (a * x) / (t + a * a);
-    const q = (b * y) / (t + b * b);
-    const excess = p * p + q * q - 1;
-    const slope = -2 * ((p * p) / (t + a * a) + (q * q) / (t + b * b));
-    const step = excess / slope;
-    t -= step;
-    if (Math.abs(step) <= 1e-15 * (t + a * a)) break;
+    const u = 1 / (t + a * a);
+    const v = 1 / (t + b * b);
+    const p = ax * u * u;
+    const q = by * v * v;
+    const excess = p + q - 1;
+    if (excess <= 0) break;
+    const step = excess / (2 * (p * u + q * v));
+    t += step;
+    if (step <= 1e-15 * (t + a * a)) break;
   }
-  const footX = (a * a * x) / (t + a * a);
-  const footY = (b * b * y) / (t + b * b);
-  return Math.hypot(x - footX, y - footY);
+  return t;
 }
