@@ -4,12 +4,15 @@ import Home from './routes/home.tsx';
 import { Shell } from './shell.tsx';
 
 // The first page comes with the first chunk; every other screen is fetched when it is opened.
+const Fit = lazy(() => import('./routes/fit.tsx'));
 const Hull = lazy(() => import('./routes/hull.tsx'));
 const LowerUnit = lazy(() => import('./routes/lower-unit.tsx'));
 const Transducer = lazy(() => import('./routes/transducer.tsx'));
 const Mount = lazy(() => import('./routes/mount.tsx'));
 const SignIn = lazy(() => import('./routes/sign-in.tsx'));
 const SignUp = lazy(() => import('./routes/sign-up.tsx'));
+const Steward = lazy(() => import('./routes/steward.tsx'));
+const StewardImport = lazy(() => import('./routes/steward-import.tsx'));
 const NotFound = lazy(() => import('./routes/not-found.tsx'));
 
 export function Router() {
@@ -18,12 +21,15 @@ export function Router() {
       <Routes>
         <Route element={<Shell />}>
           <Route index element={<Home />} />
+          <Route path="fit" element={<Fit />} />
           <Route path="hulls/:id" element={<Hull />} />
           <Route path="lower-units/:id" element={<LowerUnit />} />
           <Route path="transducers/:id" element={<Transducer />} />
           <Route path="mounts/:id" element={<Mount />} />
           <Route path="sign-in" element={<SignIn />} />
           <Route path="sign-up" element={<SignUp />} />
+          <Route path="steward" element={<Steward />} />
+          <Route path="steward/imports/:id" element={<StewardImport />} />
           <Route path="*" element={<NotFound />} />
         </Route>
       </Routes>

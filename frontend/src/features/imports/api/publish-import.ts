@@ -1,0 +1,15 @@
+import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { api, bodyOf } from '../../../lib/api-client.ts';
+
+export function publishImport({ id, why }: { id: string; why: string }): Promise<{ edition: number }> {
+  return bodyOf(api.POST('/imports/{id}/publish', { params: { path: { id } }, body: { why, holdCautions: false } }));
+}
+
+/** Makes the new and changed rows an edition. Everything read from the catalog is out of date afterwards. */
+export function usePublishImport(id: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (why: string) => publishImport({ id, why }),
+    onSettled: () => client.invalidateQueries(),
+  });
+}
