@@ -9,7 +9,7 @@ export default defineConfig({
       {
         test: {
           name: 'backend',
-          include: ['backend/src/**/*.test.ts', 'tests/api/**/*.test.ts'],
+          include: ['backend/src/**/*.test.ts', 'tests/start/**/*.test.ts'],
           environment: 'node',
           testTimeout: 20_000,
           globalSetup: './tests/support/seeded-database.ts',

@@ -77,7 +77,7 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
 
 function prepareFolder(uploadsFolder: string, dataFolder: string): void {
   try {
-    mkdirSync(uploadsFolder, { recursive: true });
+    makeFolders(uploadsFolder);
     accessSync(dataFolder, constants.W_OK);
     // root passes every access check, also on a read-only disk: only a real write tells.
     writeFileSync(path.join(dataFolder, '.writable'), '');
@@ -86,6 +86,13 @@ function prepareFolder(uploadsFolder: string, dataFolder: string): void {
       `The data folder ${dataFolder} cannot be written (${(error as NodeJS.ErrnoException).code ?? 'unknown reason'}); choose another with DATA_DIR.`,
     );
   }
+}
+
+/** Step by step: mkdir's own recursion never ends where the system refuses with ENOENT, as /proc does. */
+function makeFolders(folder: string): void {
+  if (existsSync(folder)) return;
+  makeFolders(path.dirname(folder));
+  mkdirSync(folder);
 }
 
 function keptSecret(dataFolder: string): string {
