@@ -27,7 +27,10 @@ export function depressionSpan(seen: SeenSolid, side: Side, fan: Fan, element: S
   const { turn, face } = seen;
   const half = halfSizes(shape);
   const back = inverse(turn);
-  const [, my, mz] = rotate(back, [-face[0], -face[1], -face[2]]);
+  const [mx, my, mz] = rotate(back, [-face[0], -face[1], -face[2]]);
+  let aftmost = Number.POSITIVE_INFINITY;
+  let foremost = Number.NEGATIVE_INFINITY;
+  let farSquared = 0;
   let least = Number.POSITIVE_INFINITY;
   let greatest = Number.NEGATIVE_INFINITY;
   let ahead = false;
@@ -36,16 +39,24 @@ export function depressionSpan(seen: SeenSolid, side: Side, fan: Fan, element: S
     const x = corner & 1 ? half[0] : -half[0];
     const y = corner & 2 ? half[1] : -half[1];
     const z = corner & 4 ? half[2] : -half[2];
+    const along = mx + back[0] * x + back[1] * y + back[2] * z;
     const out = sign * (my + back[3] * x + back[4] * y + back[5] * z);
     const down = mz + back[6] * x + back[7] * y + back[8] * z;
     const angle = Math.atan2(down, out);
     least = Math.min(least, angle);
     greatest = Math.max(greatest, angle);
+    aftmost = Math.min(aftmost, along);
+    foremost = Math.max(foremost, along);
+    farSquared = Math.max(farSquared, along * along + out * out + down * down);
     ahead ||= out >= 0;
     below ||= down >= 0;
   }
   // Rays point outward and down: what lies wholly inboard or wholly above is never met.
   if (!ahead || !below) return null;
+  // Nor is what lies wholly ahead or aft of where the rays can be before they are past it.
+  const past = Math.min(reachM, Math.sqrt(farSquared) + element.apertureM);
+  const widest = element.apertureM / 2 + past * Math.sin(element.alongTrackWidthRad / 2) + marginRad;
+  if (aftmost > widest || foremost < -widest) return null;
   // The corners go round the sensor, or across the branch of the angle: no saying.
   if (greatest - least >= Math.PI) return whole;
   const from = fan.depressionsRad[0] as number;

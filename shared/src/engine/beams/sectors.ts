@@ -3,7 +3,7 @@ import type { Owner, Solid } from '../solids/solid.ts';
 import { hiddenAbove, leastSectorDeg, thinnedFrom } from '../thresholds.ts';
 import { radToDeg } from '../units.ts';
 import type { Fan } from './fan.ts';
-import type { SlabProfile } from './slab.ts';
+import { type SlabProfile, shareTaken } from './slab.ts';
 
 export interface Sector {
   /** Depression in the sensor frame. */
@@ -18,9 +18,7 @@ export interface Sector {
 
 /** Σ w (1 − blocked) / Σ w, 0 to 1. */
 export function clearShare(fan: Fan, blocked: Float64Array): number {
-  let kept = 0;
-  for (let i = 0; i < blocked.length; i++) kept += (fan.weights[i] as number) * (1 - (blocked[i] as number));
-  return Math.min(1, Math.max(0, kept / fan.totalWeight));
+  return Math.min(1, Math.max(0, 1 - shareTaken(fan, blocked)));
 }
 
 type Level = 'open' | 'thinned' | 'hidden';

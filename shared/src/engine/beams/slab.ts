@@ -63,6 +63,32 @@ export function castSlab(solids: readonly Solid[], sensor: Pose, element: SideEl
   return { blocked, bySolid };
 }
 
+/**
+ * Whether a side is clear: the same as asking `castSlab` for a clear share of at least `least`, but gives up as soon as what one
+ * solid takes alone is too much.
+ */
+export function isSlabClear(solids: readonly Solid[], sensor: Pose, element: SideElement, fan: Fan, side: Side, least: number): boolean {
+  const inTheWay: Solid[] = [];
+  for (const solid of solids) {
+    const seen = seenBy(sensor, solid);
+    const span = depressionSpan(seen, side, fan, element);
+    if (!span) continue;
+    const own = castSolid(seen, span, element, fan, side, new Int32Array(fan.depressionsRad.length * ways));
+    if (!own) continue;
+    if (shareTaken(fan, own) > 1 - least + 1e-12) return false;
+    inTheWay.push(solid);
+  }
+  if (inTheWay.length === 0) return true;
+  return 1 - shareTaken(fan, castSlab(inTheWay, sensor, element, fan, side).blocked) >= least;
+}
+
+/** Share of the side's two-way weight that is taken, 0 to 1. */
+export function shareTaken(fan: Fan, taken: Float64Array): number {
+  let lost = 0;
+  for (let i = 0; i < taken.length; i++) lost += (fan.weights[i] as number) * (taken[i] as number);
+  return lost / fan.totalWeight;
+}
+
 /** Marks the cells one solid takes and counts them, each weighed by its opacity; null where it takes none. */
 function castSolid(seen: SeenSolid, span: Span, element: SideElement, fan: Fan, side: Side, cells: Int32Array): Float64Array | null {
   const { solid, turn, face } = seen;
