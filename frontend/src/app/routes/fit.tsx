@@ -42,20 +42,21 @@ export default function Fit() {
 
   const boat = state.hull === null ? `${hullFormWords(state.form)}, ${formatQuantity(state.lengthM, 'lengthM', units)}` : names.hull;
   return (
+    // On a phone: verdict, drawing, inputs, answer, then the other two drawings. On a desk: inputs, drawings, answer side by side.
     <div className="flex flex-col desk:grid desk:grid-cols-[20rem_minmax(0,1fr)_23rem] desk:grid-rows-[auto_auto_1fr]">
       <div className="desk:col-span-3">
         <AddressNotes refused={refused} onForget={forgetRefused} stamp={stamp} answer={fresh} />
       </div>
       <section aria-label="Verdict" className="flex flex-col gap-3 px-4 py-4 desk:col-start-3 desk:row-start-2 desk:px-6">
-        <PageTitle title={boat ? `Check a fit: ${boat}` : 'Check a fit'} className="text-note font-firm text-ink-2">
+        <PageTitle title={boat ? `Check a fit: ${boat}` : 'Check a fit'} className="text-body">
           Check a fit{boat && `: ${boat}`}
         </PageTitle>
         {failed && <Failure error={failed.error} what={`read the ${partWord(failed.kind)}`} retry={failed.retry} />}
         {fit.isError && !failed && <Failure error={fit.error} what="work out this check" retry={() => void fit.refetch()} />}
         {answer ? <Verdict answer={answer} state={state} stale={stale} /> : !fit.isError && <Pending what="Working it out" />}
       </section>
-      <div className="border-y border-rule bg-sheet desk:col-start-2 desk:row-span-2 desk:row-start-2 desk:border-x desk:border-y-0">
-        <div className="desk:sticky desk:top-0">
+      <div className="contents bg-sheet desk:col-start-2 desk:row-span-2 desk:row-start-2 desk:block desk:border-x desk:border-rule">
+        <div className="contents desk:sticky desk:top-0 desk:block">
           {parts ? (
             <>
               <FitAstern state={state} parts={parts} answer={answer} stale={stale} change={change} />
@@ -66,10 +67,19 @@ export default function Fit() {
           )}
         </div>
       </div>
-      <div className="desk:col-start-1 desk:row-span-2 desk:row-start-2">
-        <FitInputs state={state} change={change} names={names} neededDeg={answer?.tilt.neededDeg ?? null} />
+      <div className="border-t border-rule max-desk:order-3 max-desk:[&_*]:scroll-mt-96 desk:col-start-1 desk:row-span-2 desk:row-start-2 desk:border-t-0">
+        <FitInputs
+          state={state}
+          change={change}
+          names={names}
+          neededDeg={answer?.tilt.neededDeg ?? null}
+          reasons={answer?.reasons.map(({ code }) => code) ?? []}
+        />
       </div>
-      <section aria-label="Answer" className="px-4 py-4 desk:col-start-3 desk:row-start-3 desk:px-6">
+      <section
+        aria-label="Answer"
+        className="relative z-10 bg-paper px-4 py-4 max-desk:order-4 desk:col-start-3 desk:row-start-3 desk:px-6"
+      >
         {answer && <Answers answer={answer} state={state} />}
       </section>
     </div>

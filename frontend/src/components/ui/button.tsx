@@ -4,13 +4,13 @@ import { Link, type LinkProps } from 'react-router';
 export type ButtonKind = 'main' | 'plain' | 'grave' | 'bare';
 
 const shape =
-  'inline-flex min-h-11 min-w-11 items-center justify-center gap-2 px-4 text-center font-firm no-underline disabled:cursor-not-allowed';
+  'inline-flex min-h-11 min-w-11 items-center justify-center gap-2 text-center font-firm no-underline disabled:cursor-not-allowed';
 const looks: Record<ButtonKind, string> = {
   /** The one thing this page is for. */
-  main: 'border border-ink bg-ink text-sheet hover:bg-slate hover:border-slate disabled:border-ink-2 disabled:bg-ink-2',
-  plain: 'border border-ink bg-sheet text-ink hover:bg-slate-wash disabled:border-rule disabled:text-ink-2',
+  main: 'px-4 border border-ink bg-ink text-sheet hover:bg-slate hover:border-slate disabled:border-ink-2 disabled:bg-ink-2',
+  plain: 'px-4 border border-ink bg-sheet text-ink hover:bg-slate-wash disabled:border-rule disabled:text-ink-2',
   /** What cannot be taken back. */
-  grave: 'border border-rust bg-sheet text-rust hover:bg-rust-wash disabled:border-rule disabled:text-ink-2',
+  grave: 'px-4 border border-rust bg-sheet text-rust hover:bg-rust-wash disabled:border-rule disabled:text-ink-2',
   bare: 'px-2 text-ink underline decoration-1 underline-offset-4 hover:decoration-2 disabled:text-ink-2',
 };
 

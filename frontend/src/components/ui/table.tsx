@@ -22,9 +22,9 @@ const features = tableFeatures({
 
 /**
  * Where a cell goes once the row is a short list on a narrow screen: at the head, at its right, under it in small print
- * with or without the heading before it.
+ * with or without the heading before it, or at full size.
  */
-export type NarrowPlace = 'head' | 'side' | 'note' | 'labelled';
+export type NarrowPlace = 'head' | 'side' | 'note' | 'labelled' | 'body';
 /** `header` must be words: on a narrow screen it may stand before the cell. */
 export type TableColumn<T extends RowData> = ColumnDef<typeof features, T> & { header: string; narrow?: NarrowPlace };
 export type Sorting = SortingState;
@@ -126,8 +126,9 @@ export function DataTable<T extends RowData>(props: DataTableProps<T>) {
 }
 
 const narrowLooks: Record<NarrowPlace, string> = {
-  head: 'max-tablet:col-start-1',
-  side: 'max-tablet:col-start-2 max-tablet:max-w-48 max-tablet:text-right',
+  body: 'max-tablet:col-span-2 max-tablet:py-1',
+  head: 'max-tablet:-order-2 max-tablet:col-start-1',
+  side: 'max-tablet:-order-1 max-tablet:col-start-2 max-tablet:max-w-48 max-tablet:text-right',
   note: 'max-tablet:col-span-2 max-tablet:text-note max-tablet:text-ink-2 max-tablet:has-[.not-noted]:hidden',
   labelled:
     'labelled max-tablet:col-span-2 max-tablet:grid max-tablet:grid-cols-[7rem_minmax(0,1fr)] max-tablet:gap-2 max-tablet:text-note max-tablet:has-[.not-noted]:hidden',

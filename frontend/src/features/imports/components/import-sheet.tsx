@@ -149,7 +149,8 @@ function Published({ record }: { record: Import }) {
   );
 }
 
-function Remarks({ record: { sameFileAs, unknownColumns } }: { record: Import }) {
+function Remarks({ record: { sameFileAs, unknownColumns, status } }: { record: Import }) {
+  const leftOut = status === 'published' ? 'their cells were left out' : 'their cells will be left out';
   return (
     <>
       {sameFileAs && (
@@ -158,7 +159,7 @@ function Remarks({ record: { sameFileAs, unknownColumns } }: { record: Import })
         </Notice>
       )}
       {unknownColumns.length > 0 && (
-        <Notice tone="care" title={`${countOf(unknownColumns.length, 'column is', 'columns are')} not known and will be left out.`}>
+        <Notice tone="care" title={`${countOf(unknownColumns.length, 'column', 'columns')} not known: ${leftOut}.`}>
           <p className="text-ink-2">{unknownColumns.join(', ')}</p>
         </Notice>
       )}

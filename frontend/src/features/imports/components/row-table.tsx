@@ -47,7 +47,17 @@ export function RowTable({ id, table, fate }: RowTableProps) {
 
 function columnsFor(table: Table, units: UnitChoice): readonly TableColumn<ListedRow>[] {
   return [
-    { id: 'n', header: 'Row', accessorKey: 'n', cell: ({ row }) => <span className="text-ink-2">{row.original.n}</span> },
+    {
+      id: 'n',
+      header: 'Row',
+      narrow: 'note',
+      cell: ({ row }) => (
+        <span className="text-ink-2">
+          <span className="tablet:sr-only">row </span>
+          {row.original.n}
+        </span>
+      ),
+    },
     { id: 'name', header: 'About', narrow: 'head', cell: ({ row }) => <About row={row.original} table={table} /> },
     {
       id: 'fate',
@@ -59,7 +69,12 @@ function columnsFor(table: Table, units: UnitChoice): readonly TableColumn<Liste
         </span>
       ),
     },
-    { id: 'what', header: 'What there is to see', cell: ({ row }) => <Findings row={row.original} table={table} units={units} /> },
+    {
+      id: 'what',
+      header: 'What there is to see',
+      narrow: 'body',
+      cell: ({ row }) => <Findings row={row.original} table={table} units={units} />,
+    },
   ];
 }
 
@@ -78,19 +93,42 @@ function Findings({ row, table, units }: { row: ListedRow; table: Table; units: 
   return (
     <ul className="flex flex-col gap-1">
       {errors.map((error) => (
-        <Cell key={`${error.column} ${error.code}`} problem={error} tone="border-rust" word="Wrong" />
+        <Cell
+          key={`${error.column} ${error.code}`}
+          problem={error}
+          tone={row.fate === 'error' ? 'border-rust' : 'border-brass'}
+          word={fateWords[row.fate]}
+        />
       ))}
       {cautions.map((caution) => (
-        <Cell key={`${caution.column} ${caution.code}`} problem={caution} tone="border-brass" word="Look again" />
+        <Cell key={`${caution.column} ${caution.code}`} problem={caution} tone="border-brass" word="look again" />
       ))}
-      {changes.map(({ field = '', before, after }) => (
-        <li key={field}>
-          {metaOfField(table, field).label}: <del className="text-ink-2">{formatFieldValue(table, field, before, units)}</del>, now{' '}
-          <ins className="font-firm no-underline">{formatFieldValue(table, field, after, units)}</ins>
-        </li>
-      ))}
+      {row.fate === 'new' && changes.length > 0 && <li className="text-note">{newValues(changes, table, units)}</li>}
+      {row.fate !== 'new' &&
+        changes.map(({ field = '', before, after }) => (
+          <li key={field}>
+            {metaOfField(table, field).label}: <del className="text-ink-2">{formatFieldValue(table, field, before, units)}</del>, now{' '}
+            <ins className="font-firm no-underline">{formatFieldValue(table, field, after, units)}</ins>
+          </li>
+        ))}
     </ul>
   );
+}
+
+/** "Form modified vee, length 4.6 m, …": a new record has nothing to compare with, and its name stands beside it. */
+function newValues(changes: ListedRow['changes'], table: Table, units: UnitChoice): string {
+  const told = changes.filter(({ field }) => field !== undefined && !nameFields.has(field));
+  const text = told.map(
+    ({ field = '', after }) => `${lowerFirst(metaOfField(table, field).label)} ${formatFieldValue(table, field, after, units)}`,
+  );
+  const sentence = text.join(', ');
+  return sentence === '' ? fateMeaning.new : `${sentence.charAt(0).toUpperCase()}${sentence.slice(1)}.`;
+}
+
+const nameFields = new Set(['maker', 'model', 'package', 'hullMaker', 'hullModel', 'hullPackage']);
+
+function lowerFirst(text: string): string {
+  return text.charAt(0).toLowerCase() + text.slice(1);
 }
 
 function Cell({ problem, tone, word }: { problem: CellProblem; tone: string; word: string }) {
