@@ -27,6 +27,34 @@ const Settings = z.object({
     .describe('A session ends after this many hours without use.'),
   UPLOAD_MAX_MB: z.coerce.number().min(1).max(1000).default(50).describe('Largest table that can be uploaded.'),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent']).default('warn').describe('How much is logged.'),
+  SITE_URL: z
+    .url({ protocol: /^https?$/ })
+    .optional()
+    .describe('Address people reach the site at; links in mails begin with it. In production needed with SMTP_URL.'),
+  SMTP_URL: z
+    .url({ protocol: /^smtps?$/ })
+    .optional()
+    .describe('Mail server, smtp(s)://user:password@host:port. Without it mails stay in the data folder’s outbox, for the admin to read.'),
+  MAIL_FROM: z.string().min(3).max(200).default('Tiltwright <no-reply@tiltwright.example>').describe('Sender of every mail.'),
+  STAFF_SECOND_FACTOR: z
+    .enum(['true', 'false'])
+    .default('false')
+    .describe('true: stewards and admins do nothing of their work without a second factor.'),
+  FREE_SPACE_RESERVE_MB: z.coerce
+    .number()
+    .min(0)
+    .default(256)
+    .describe('Below this much free space uploads and imports are refused; reading and signing in go on.'),
+  KEEP_UPLOADS_DAYS: z.coerce.number().min(1).default(180).describe('Uploaded tables and their rows are kept this long after publishing.'),
+  KEEP_MAIL_DAYS: z.coerce.number().min(1).default(30).describe('Bodies of mails are kept this long.'),
+  KEEP_AUDIT_YEARS: z.coerce.number().min(1).default(7).describe('Entries of the audit log are kept this long.'),
+  TIDY_HOUR: z.coerce
+    .number()
+    .int()
+    .min(0)
+    .max(23)
+    .default(3)
+    .describe('Hour of the night, by this machine’s clock, at which old things are removed.'),
   TRUST_PROXY: z.coerce.number().int().min(0).max(5).default(0).describe('How many proxies stand in front; 0 for none.'),
 });
 
@@ -41,6 +69,17 @@ export interface Config {
   uploadMaxBytes: number;
   logLevel: 'fatal' | 'error' | 'warn' | 'info' | 'debug' | 'silent';
   trustProxy: number;
+  /** Without a slash at its end. */
+  siteUrl: string;
+  outboxFolder: string;
+  smtpUrl: string | null;
+  mailFrom: string;
+  staffSecondFactor: boolean;
+  freeSpaceReserveBytes: number;
+  keepUploadsDays: number;
+  keepMailDays: number;
+  keepAuditYears: number;
+  tidyHour: number;
 }
 
 /**
@@ -57,10 +96,13 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
   const settings = parsed.data;
   const dataFolder = path.resolve(topFolder, settings.DATA_DIR);
   const uploadsFolder = path.join(dataFolder, 'uploads');
-  prepareFolder(uploadsFolder, dataFolder);
+  const outboxFolder = path.join(dataFolder, 'outbox');
+  prepareFolders(dataFolder, [uploadsFolder, outboxFolder]);
   const production = settings.NODE_ENV === 'production';
   if (production && !settings.SESSION_SECRET)
     throw new StartProblem('In production SESSION_SECRET has to be set, to 32 characters or more.');
+  if (production && settings.SMTP_URL && !settings.SITE_URL)
+    throw new StartProblem('In production SITE_URL has to be set where SMTP_URL is: links in mails begin with it.');
   return {
     port: settings.PORT,
     host: settings.HOST,
@@ -72,12 +114,22 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     uploadMaxBytes: settings.UPLOAD_MAX_MB * 1024 * 1024,
     logLevel: settings.LOG_LEVEL,
     trustProxy: settings.TRUST_PROXY,
+    siteUrl: (settings.SITE_URL ?? `http://${settings.HOST}:${settings.PORT}`).replace(/\/+$/, ''),
+    outboxFolder,
+    smtpUrl: settings.SMTP_URL ?? null,
+    mailFrom: settings.MAIL_FROM,
+    staffSecondFactor: settings.STAFF_SECOND_FACTOR === 'true',
+    freeSpaceReserveBytes: settings.FREE_SPACE_RESERVE_MB * 1024 * 1024,
+    keepUploadsDays: settings.KEEP_UPLOADS_DAYS,
+    keepMailDays: settings.KEEP_MAIL_DAYS,
+    keepAuditYears: settings.KEEP_AUDIT_YEARS,
+    tidyHour: settings.TIDY_HOUR,
   };
 }
 
-function prepareFolder(uploadsFolder: string, dataFolder: string): void {
+function prepareFolders(dataFolder: string, inside: readonly string[]): void {
   try {
-    makeFolders(uploadsFolder);
+    for (const folder of inside) makeFolders(folder);
     accessSync(dataFolder, constants.W_OK);
     // root passes every access check, also on a read-only disk: only a real write tells.
     writeFileSync(path.join(dataFolder, '.writable'), '');

@@ -2,11 +2,15 @@
 import path from 'node:path';
 import Database from 'better-sqlite3';
 import { type BetterSQLite3Database, drizzle } from 'drizzle-orm/better-sqlite3';
+import * as access from './schema/access.ts';
 import * as catalog from './schema/catalog.ts';
+import * as importWork from './schema/import-work.ts';
 import * as imports from './schema/imports.ts';
+import * as mail from './schema/mail.ts';
+import * as outbox from './schema/outbox.ts';
 import * as people from './schema/people.ts';
 
-export const schema = { ...catalog, ...people, ...imports };
+export const schema = { ...catalog, ...people, ...imports, ...importWork, ...outbox, ...access, ...mail };
 export type Db = BetterSQLite3Database<typeof schema> & { $client: Database.Database };
 
 /** Opens (and makes, where missing) the database file; `:memory:` for tests that need no file. */

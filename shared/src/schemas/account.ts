@@ -16,8 +16,23 @@ export const SignUp = z
   .meta({ id: 'SignUp' });
 export type SignUp = z.infer<typeof SignUp>;
 
+/** The units a person reads and types in; the product itself keeps mm, m, kn and kg. */
+export const Units = z
+  .strictObject({ length: z.enum(['mm', 'in']), speed: z.enum(['kn', 'km/h', 'mph']), mass: z.enum(['kg', 'lb']) })
+  .meta({ id: 'Units' });
+export type Units = z.infer<typeof Units>;
+
 export const Account = z
-  .strictObject({ id: z.string(), email: z.string(), name: z.string(), roles: z.array(Role), createdAt: z.iso.datetime() })
+  .strictObject({
+    id: z.string(),
+    email: z.string(),
+    name: z.string(),
+    roles: z.array(Role),
+    createdAt: z.iso.datetime(),
+    units: Units.nullable().describe('Null until chosen.'),
+    secondFactor: z.boolean().describe('Signing in needs a code as well.'),
+    secondFactorDemanded: z.boolean().describe('This site asks staff for one; until it is set up, staff work is refused.'),
+  })
   .meta({ id: 'Account' });
 export type Account = z.infer<typeof Account>;
 

@@ -7,7 +7,7 @@ import type { Deps } from '../../deps.ts';
 import { ApiProblem } from '../../errors.ts';
 import { noStore, type Route, route } from '../../http/operation.ts';
 import { createAccount } from '../accounts/create-account.ts';
-import { findUser, findUserByEmail, toAccount, type User } from '../accounts/queries.ts';
+import { accountOf, findUser, findUserByEmail, type User } from '../accounts/queries.ts';
 import { audit } from '../audit.ts';
 
 const tag = 'Accounts';
@@ -18,7 +18,7 @@ export function sessionRoutes({ db, config }: Deps): Route[] {
   const begin = async (req: Request, user: User): Promise<Session> => {
     // A new session id, so that one planted before signing in is worth nothing.
     await new Promise<void>((resolve, reject) => req.login({ id: user.id }, (error) => (error ? reject(error) : resolve())));
-    return { account: toAccount(user), expiresAt: new Date(Date.now() + config.sessionMs).toISOString() };
+    return { account: accountOf({ db, config }, user), expiresAt: new Date(Date.now() + config.sessionMs).toISOString() };
   };
 
   return [
@@ -64,7 +64,10 @@ export function sessionRoutes({ db, config }: Deps): Route[] {
       },
       ({ actor }) => {
         const user = actor.kind === 'person' ? findUser(db, actor.userId) : undefined;
-        return { account: user ? toAccount(user) : null, expiresAt: user ? new Date(Date.now() + config.sessionMs).toISOString() : null };
+        return {
+          account: user ? accountOf({ db, config }, user) : null,
+          expiresAt: user ? new Date(Date.now() + config.sessionMs).toISOString() : null,
+        };
       },
     ),
     route(
@@ -124,7 +127,7 @@ export function sessionRoutes({ db, config }: Deps): Route[] {
       ({ actor }) => {
         const user = actor.kind === 'visitor' ? undefined : findUser(db, actor.userId);
         if (!user) throw new ApiProblem('not-found', 'This account is gone.');
-        return toAccount(user);
+        return accountOf({ db, config }, user);
       },
     ),
   ];
