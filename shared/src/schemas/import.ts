@@ -28,6 +28,8 @@ export const Import = z
     rows: z.int().nullable(),
     checkedRows: z.int(),
     counts: FateCounts.nullable().describe('Null until the check has ended.'),
+    headerRow: z.int().describe('Row of the file that holds the header.'),
+    needsMapping: z.boolean().describe('The header is in words of its own: map its columns before the check.'),
     unknownColumns: z.array(z.string()).describe('Headers that name no column of the table; their cells are left out.'),
     edition: z.int().nullable(),
     problem: z.strictObject({ code: z.string(), message: z.string() }).nullable(),
@@ -45,6 +47,11 @@ export type CellProblem = z.infer<typeof CellProblem>;
 export const FieldChange = z.strictObject({ field: z.string(), before: z.unknown(), after: z.unknown() }).meta({ id: 'FieldChange' });
 export type FieldChange = z.infer<typeof FieldChange>;
 
+export const rowDecisions = ['accept', 'skip'] as const;
+export type RowDecision = (typeof rowDecisions)[number];
+export const rowResolutions = ['catalog', 'row'] as const;
+export type RowResolution = (typeof rowResolutions)[number];
+
 export const ImportRow = z
   .strictObject({
     n: z.int().describe('Row number as a spreadsheet counts it.'),
@@ -54,10 +61,32 @@ export const ImportRow = z
     errors: z.array(CellProblem),
     cautions: z.array(CellProblem),
     changes: z.array(FieldChange),
-    cells: z.record(z.string(), z.string()),
+    cells: z.record(z.string(), z.string()).describe('The file’s own cells by its own headers.'),
+    edits: z.record(z.string(), z.string()).describe('Cells mended in place, by canonical column.'),
+    decision: z
+      .enum(rowDecisions)
+      .nullable()
+      .describe('`skip` leaves the row out; `accept` ticks its cautions, which counts where publishing holds rows with cautions.'),
+    resolution: z.enum(rowResolutions).nullable().describe('How its conflict was decided.'),
   })
   .meta({ id: 'ImportRow' });
 export type ImportRow = z.infer<typeof ImportRow>;
+
+export const RowPatch = z
+  .strictObject({
+    cells: z
+      .record(z.string().max(120), z.string().max(4000).nullable())
+      .optional()
+      .describe('New text by canonical column or by the file’s own header; null takes an edit back. Units as in the mapping.'),
+    decision: z.enum(rowDecisions).nullable().optional(),
+    resolution: z
+      .enum(rowResolutions)
+      .nullable()
+      .optional()
+      .describe('`catalog`: conflicting values stay as they are stored; `row`: the row’s values replace them.'),
+  })
+  .meta({ id: 'RowPatch' });
+export type RowPatch = z.infer<typeof RowPatch>;
 
 export const CreatedImport = z.strictObject({ id: z.string(), status: z.enum(importStatuses) }).meta({ id: 'CreatedImport' });
 export const PublishOrder = z

@@ -138,8 +138,14 @@ export const revisions = sqliteTable(
     why: text('why'),
     source: text('source'),
     changes: text('changes', { mode: 'json' }).$type<FieldChange[]>().notNull(),
+    /** The touched fields as they were (null: first published here) and as they are now; null for a blank one. */
     before: text('before', { mode: 'json' }).$type<Record<string, unknown>>(),
     after: text('after', { mode: 'json' }).$type<Record<string, unknown>>().notNull(),
+    /** Where the touched fields came from before, and come from now. */
+    origins: text('origins', { mode: 'json' }).$type<{
+      before: Record<string, Provenance[string]>;
+      after: Record<string, Provenance[string]>;
+    }>(),
   },
   (table) => [primaryKey({ columns: [table.recordId, table.revision] }), index('revisions_edition').on(table.edition)],
 );

@@ -1,5 +1,6 @@
 import type { Table } from '@tiltwright/shared/schemas/catalog-record.ts';
 import type { CellProblem, Fate, FateCounts, FieldChange, ImportStatus } from '@tiltwright/shared/schemas/import.ts';
+import type { Fix, Mapping } from '@tiltwright/shared/schemas/mapping.ts';
 import { sql } from 'drizzle-orm';
 import { check, index, integer, primaryKey, sqliteTable, text } from 'drizzle-orm/sqlite-core';
 import type { Provenance } from './catalog.ts';
@@ -23,6 +24,14 @@ export const imports = sqliteTable(
     checkedAgainst: integer('checked_against'),
     counts: text('counts', { mode: 'json' }).$type<FateCounts>(),
     header: text('header', { mode: 'json' }).$type<string[]>(),
+    /** Row of the file that holds the header, counted from 1. */
+    headerRow: integer('header_row').notNull().default(1),
+    /** The header is in words of its own: nothing is read before somebody has mapped it. */
+    needsMapping: integer('needs_mapping', { mode: 'boolean' }).notNull().default(false),
+    /** How columns are read; null where the canonical headers say it. */
+    mapping: text('mapping', { mode: 'json' }).$type<Mapping>(),
+    /** Same fix for all cells alike, in the order they were made. */
+    fixes: text('fixes', { mode: 'json' }).$type<Fix[]>().notNull().default([]),
     unknownColumns: text('unknown_columns', { mode: 'json' }).$type<string[]>().notNull().default([]),
     edition: integer('edition'),
     problem: text('problem', { mode: 'json' }).$type<{ code: string; message: string }>(),
@@ -38,10 +47,13 @@ export const imports = sqliteTable(
   ],
 );
 
-/** What a row would write: field values with where each comes from. */
+export type Origin = Provenance[string];
+
+/** What a row would write: field values, where they come from, and the few fields that come from elsewhere or are known closer. */
 export interface RowWrite {
   values: Record<string, unknown>;
-  provenance: Provenance;
+  origin: Origin;
+  origins?: Record<string, Origin>;
 }
 
 export const importRows = sqliteTable(
@@ -54,6 +66,8 @@ export const importRows = sqliteTable(
     fate: text('fate').$type<Fate>().notNull(),
     name: text('name').notNull(),
     recordId: text('record_id'),
+    /** What the row is about: rows of one key say the same thing twice, or contradict each other. */
+    rowKey: text('row_key'),
     cells: text('cells', { mode: 'json' }).$type<string[]>().notNull(),
     write: text('write', { mode: 'json' }).$type<RowWrite>(),
     errors: text('errors', { mode: 'json' }).$type<CellProblem[]>().notNull(),
@@ -63,6 +77,7 @@ export const importRows = sqliteTable(
   (table) => [
     primaryKey({ columns: [table.importId, table.n] }),
     index('import_rows_fate').on(table.importId, table.fate),
+    index('import_rows_key').on(table.importId, table.rowKey),
     check('import_rows_fate', sql.raw("fate IN ('new', 'changed', 'unchanged', 'duplicate', 'conflict', 'error')")),
   ],
 );

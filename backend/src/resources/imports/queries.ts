@@ -57,7 +57,7 @@ export function sameFileAs(db: Db, of: ImportRecord): string | null {
 }
 
 export function toImport(db: Db, row: ImportRecord): Import {
-  const { storedAs: _storedAs, checkedAgainst: _checkedAgainst, header: _header, ...shown } = row;
+  const { storedAs: _storedAs, checkedAgainst: _checkedAgainst, header: _header, mapping: _mapping, fixes: _fixes, ...shown } = row;
   return { ...shown, sameFileAs: sameFileAs(db, row) };
 }
 
@@ -72,5 +72,8 @@ export function toImportRow(row: ImportRowRecord, header: readonly string[]): Im
     cautions,
     changes,
     cells: Object.fromEntries(header.map((column, index) => [column, cells[index] ?? ''])),
+    edits: {},
+    decision: null,
+    resolution: null,
   };
 }
