@@ -21,18 +21,31 @@ import { boxAround, wedgeLabels } from './wedge-labels.ts';
 interface AsternDrawingProps {
   scene: BoatScene;
   alternative: string;
+  /** How much each side sees, in a few words. */
+  outcome?: string;
   /** A length as the reader wants it, e.g. "380 mm". */
   lengthText: (mm: number) => string;
   stale?: boolean;
   maxHeightPx?: number;
   /** Called while the sensor is drawn sideways, with its new place off the centreline. */
   onMoveSensor?: ((offsetM: number) => void) | undefined;
+  /** Of the drawing alone, without the key of letters that follows it. */
+  className?: string;
 }
 
 const margins = { leftPx: 12, rightPx: 12, topPx: 48, bottomPx: 30 };
 
 /** The boat from astern, to scale: what each side sees and what hides it. */
-export function AsternDrawing({ scene, alternative, lengthText, stale = false, maxHeightPx, onMoveSensor }: AsternDrawingProps) {
+export function AsternDrawing({
+  scene,
+  alternative,
+  outcome,
+  lengthText,
+  stale = false,
+  maxHeightPx,
+  onMoveSensor,
+  className = '',
+}: AsternDrawingProps) {
   const id = useId();
   const [boxRef, widthPx] = useMeasuredWidth<HTMLDivElement>(640);
   const scale = paperScale(asternBounds(scene, widthPx), margins, widthPx, maxHeightPx);
@@ -59,95 +72,100 @@ export function AsternDrawing({ scene, alternative, lengthText, stale = false, m
   const barMm = scaleBarMm(scale.pxPerM, Math.min(140, widthPx / 3));
 
   return (
-    <DrawingFrame
-      title="From astern"
-      alternative={alternative}
-      scale={`1 : ${scale.ratio}`}
-      boxRef={boxRef}
-      widthPx={widthPx}
-      heightPx={scale.heightPx}
-      stale={stale}
-      below={<WedgeKey labels={labels} />}
-    >
-      <Hatching hiddenId={`${id}-hidden`} thinnedId={`${id}-thinned`} />
-      <clipPath id={`${id}-paper`}>
-        <rect x="0" y={margins.topPx - 12} width={widthPx} height={scale.heightPx - margins.topPx + 12} />
-      </clipPath>
-      <g clipPath={`url(#${id}-paper)`}>
-        <polygon
-          points={svgPoints([[0, left[1]], ...bottom, [widthPx, right[1]], [widthPx, scale.heightPx], [0, scale.heightPx]])}
-          className="fill-slate-wash"
-        />
-        <g className={stale ? 'opacity-50' : ''}>
-          {fans.map(({ side, wedges }) => (
-            <FanOutlines
-              key={side}
-              scene={scene}
-              side={side}
-              wedges={wedges}
-              radiusM={radiusM}
-              scale={scale}
-              hiddenId={`${id}-hidden`}
-              thinnedId={`${id}-thinned`}
+    <>
+      <div className={className}>
+        <DrawingFrame
+          title="From astern"
+          alternative={alternative}
+          outcome={outcome}
+          scale={`1 : ${scale.ratio}`}
+          boxRef={boxRef}
+          widthPx={widthPx}
+          heightPx={scale.heightPx}
+          stale={stale}
+        >
+          <Hatching hiddenId={`${id}-hidden`} thinnedId={`${id}-thinned`} />
+          <clipPath id={`${id}-paper`}>
+            <rect x="0" y={margins.topPx - 12} width={widthPx} height={scale.heightPx - margins.topPx + 12} />
+          </clipPath>
+          <g clipPath={`url(#${id}-paper)`}>
+            <polygon
+              points={svgPoints([[0, left[1]], ...bottom, [widthPx, right[1]], [widthPx, scale.heightPx], [0, scale.heightPx]])}
+              className="fill-slate-wash"
             />
-          ))}
-        </g>
-        <path
-          d={`M0 ${round(left[1])} H${round(left[0])} M${round(right[0])} ${round(right[1])} H${widthPx}`}
-          className="stroke-slate"
-          strokeDasharray="9 3 2 3"
-        />
-        <polygon
-          points={svgPoints([[keelX - halfBeamPx, topY], ...bottom, [keelX + halfBeamPx, topY]])}
-          className="fill-sheet stroke-ink-2"
-          strokeWidth="1"
-        />
-        <polyline points={svgPoints(bottom)} fill="none" className="stroke-ink" strokeWidth="2" strokeLinejoin="round" />
-        <line
-          x1={round(keelX)}
-          x2={round(keelX)}
-          y1={round(topY)}
-          y2={round(scale.at([0, 0])[1])}
-          className="stroke-ink-2"
-          strokeDasharray="10 3 2 3"
-          strokeWidth="0.75"
-        />
-        <MotorOutlines solids={scene.solids} view="astern" scale={scale} />
-        <polygon points={svgPoints(housing)} className="fill-ink stroke-ink" strokeWidth="1" />
-      </g>
-      <DimensionAcross
-        fromX={keelX}
-        toX={facePx[0]}
-        y={margins.topPx - 18}
-        fromY={topY - 4}
-        toY={Math.min(...housing.map(([, y]) => y)) - 3}
-        text={lengthText(Math.abs(sensor.offsetM) * 1000)}
-      />
-      <DropFigure
-        scene={scene}
-        atPx={scale.at([sensor.offsetM, bottomZM(hull, sensor.offsetM)])}
-        widthPx={widthPx}
-        text={lengthText(Math.abs(sensor.dropM) * 1000)}
-      />
-      <WedgeWords labels={labels} />
-      <PaperText x={12} y={18} className="fill-ink-2">
-        port
-      </PaperText>
-      <PaperText x={widthPx - 12} y={18} anchor="end" className="fill-ink-2">
-        starboard
-      </PaperText>
-      <ScaleBar x={12} y={scale.heightPx - 10} lengthPx={(barMm / 1000) * scale.pxPerM} text={lengthText(barMm)} />
-      {onMoveSensor && (
-        <circle
-          cx={round(facePx[0])}
-          cy={round(facePx[1])}
-          r="22"
-          className="cursor-ew-resize fill-transparent stroke-ink-2"
-          strokeDasharray="2 4"
-          {...drag}
-        />
-      )}
-    </DrawingFrame>
+            <g className={stale ? 'opacity-50' : ''}>
+              {fans.map(({ side, wedges }) => (
+                <FanOutlines
+                  key={side}
+                  scene={scene}
+                  side={side}
+                  wedges={wedges}
+                  radiusM={radiusM}
+                  scale={scale}
+                  hiddenId={`${id}-hidden`}
+                  thinnedId={`${id}-thinned`}
+                />
+              ))}
+            </g>
+            <path
+              d={`M0 ${round(left[1])} H${round(left[0])} M${round(right[0])} ${round(right[1])} H${widthPx}`}
+              className="stroke-slate"
+              strokeDasharray="9 3 2 3"
+            />
+            <polygon
+              points={svgPoints([[keelX - halfBeamPx, topY], ...bottom, [keelX + halfBeamPx, topY]])}
+              className="fill-sheet stroke-ink-2"
+              strokeWidth="1"
+            />
+            <polyline points={svgPoints(bottom)} fill="none" className="stroke-ink" strokeWidth="2" strokeLinejoin="round" />
+            <line
+              x1={round(keelX)}
+              x2={round(keelX)}
+              y1={round(topY)}
+              y2={round(scale.at([0, 0])[1])}
+              className="stroke-ink-2"
+              strokeDasharray="10 3 2 3"
+              strokeWidth="0.75"
+            />
+            <MotorOutlines solids={scene.solids} view="astern" scale={scale} />
+            <polygon points={svgPoints(housing)} className="fill-ink stroke-ink" strokeWidth="1" />
+          </g>
+          <DimensionAcross
+            fromX={keelX}
+            toX={facePx[0]}
+            y={margins.topPx - 18}
+            fromY={topY - 4}
+            toY={Math.min(...housing.map(([, y]) => y)) - 3}
+            text={lengthText(Math.abs(sensor.offsetM) * 1000)}
+          />
+          <DropFigure
+            scene={scene}
+            atPx={scale.at([sensor.offsetM, bottomZM(hull, sensor.offsetM)])}
+            widthPx={widthPx}
+            text={lengthText(Math.abs(sensor.dropM) * 1000)}
+          />
+          <WedgeWords labels={labels} />
+          <PaperText x={12} y={18} className="fill-ink-2">
+            port
+          </PaperText>
+          <PaperText x={widthPx - 12} y={18} anchor="end" className="fill-ink-2">
+            starboard
+          </PaperText>
+          <ScaleBar x={12} y={scale.heightPx - 10} lengthPx={(barMm / 1000) * scale.pxPerM} text={lengthText(barMm)} />
+          {onMoveSensor && (
+            <circle
+              cx={round(facePx[0])}
+              cy={round(facePx[1])}
+              r="22"
+              className="cursor-ew-resize fill-transparent stroke-ink-2"
+              strokeDasharray="2 4"
+              {...drag}
+            />
+          )}
+        </DrawingFrame>
+      </div>
+      <WedgeKey labels={labels} />
+    </>
   );
 }
 

@@ -4,6 +4,8 @@ interface DrawingFrameProps {
   title: string;
   /** What the drawing shows, in sentences, for who cannot see it. */
   alternative: string;
+  /** The outcome in a few words, under the title. */
+  outcome?: string | undefined;
   /** "1 : 12" and the like. */
   scale: string;
   boxRef: RefObject<HTMLDivElement | null>;
@@ -12,14 +14,13 @@ interface DrawingFrameProps {
   /** Still the last answer, while the next one is on its way. */
   stale?: boolean;
   children: ReactNode;
-  /** Stands under the drawing: what the letters mean. */
-  below?: ReactNode;
 }
 
 /** A drawing with its caption, its scale and its words. It is laid out in pixels, so text keeps its size at any width. */
 export function DrawingFrame({
   title,
   alternative,
+  outcome,
   scale,
   boxRef,
   widthPx,
@@ -27,7 +28,6 @@ export function DrawingFrame({
   stale,
 
   children,
-  below,
 }: DrawingFrameProps) {
   const id = useId();
   return (
@@ -35,6 +35,7 @@ export function DrawingFrame({
       <figcaption className="flex flex-wrap items-baseline justify-between gap-x-4 px-3 pt-2">
         <span className="font-firm">{title}</span>
         <span className="text-note text-ink-2">{scale}</span>
+        {outcome && <span className="w-full text-note text-ink-2">{outcome}</span>}
       </figcaption>
       <div ref={boxRef} className="w-full overflow-hidden">
         <svg
@@ -50,7 +51,6 @@ export function DrawingFrame({
           {children}
         </svg>
       </div>
-      {below}
     </figure>
   );
 }

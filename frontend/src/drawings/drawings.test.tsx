@@ -88,11 +88,10 @@ describe('the boat from the side', () => {
         title="From the side, at 18 kn"
         alternative="x"
         lengthText={lengthText}
-        tiltText={(deg) => `attitude ${deg.toFixed(1)}`}
       />,
     );
-    expect(screen.getByText('runs 4.0° bow up')).toBeInTheDocument();
-    expect(screen.getByText(/sensor attitude -?0\.0/)).toBeInTheDocument();
+    expect(screen.getByText('boat 4.0° bow up')).toBeInTheDocument();
+    expect(screen.getByText('sensor level')).toBeInTheDocument();
   });
 });
 

@@ -19,8 +19,6 @@ interface SideDrawingProps {
   title: string;
   alternative: string;
   lengthText: (mm: number) => string;
-  /** "nose-up 2.0°": an angle in the words of the trade. */
-  tiltText: (deg: number) => string;
   stale?: boolean;
   maxHeightPx?: number;
 }
@@ -32,7 +30,7 @@ const asideM = 0.12;
 const offPaperM = 6;
 
 /** From port, in the water frame: how the boat runs, how the sensor stands to the keel line and to the water. */
-export function SideDrawing({ scene, trimRad, title, alternative, lengthText, tiltText, stale = false, maxHeightPx }: SideDrawingProps) {
+export function SideDrawing({ scene, trimRad, title, alternative, lengthText, stale = false, maxHeightPx }: SideDrawingProps) {
   const [boxRef, widthPx] = useMeasuredWidth<HTMLDivElement>(360);
   const { hull, sensor } = scene;
   const water = (pointM: Vec3) => boatToWater(pointM, trimRad);
@@ -90,10 +88,10 @@ export function SideDrawing({ scene, trimRad, title, alternative, lengthText, ti
       <polygon points={svgPoints(housing.map(scale.at))} className="fill-ink stroke-ink" strokeWidth="1" />
       <line {...ends(axis[0], axis[1])} className="stroke-rust" strokeWidth="1.25" />
       <PaperText x={12} y={wordsY} strong>
-        {`runs ${radToDeg(Math.abs(trimRad)).toFixed(1)}° ${trimRad < 0 ? 'bow down' : 'bow up'}`}
+        {`boat ${angleWords(radToDeg(trimRad), 'bow up', 'bow down')}`}
       </PaperText>
       <PaperText x={12} y={wordsY + 18} className="fill-rust" strong>
-        {`sensor ${tiltText(attitudeDeg)}`}
+        {`sensor ${angleWords(attitudeDeg, 'nose-up', 'nose-down')}`}
       </PaperText>
       <PaperText x={12} y={wordsY + 34} className="fill-ink-2">
         in the water
@@ -105,4 +103,10 @@ export function SideDrawing({ scene, trimRad, title, alternative, lengthText, ti
 
 function ends([x1, y1]: Point2, [x2, y2]: Point2) {
   return { x1: round(x1), y1: round(y1), x2: round(x2), y2: round(y2) };
+}
+
+/** "4.0° bow up", "level": short, because it stands on the drawing. */
+function angleWords(deg: number, up: string, down: string): string {
+  const size = Math.abs(deg).toFixed(1);
+  return Number(size) === 0 ? 'level' : `${size}° ${deg > 0 ? up : down}`;
 }

@@ -12,8 +12,10 @@ export interface FitField {
   /** Stands where the address says nothing; null means "don't know" or "as needed". */
   standard: number | null;
   label: string;
-  /** Where it is measured, one sentence. */
+  /** What it is, one line under the label. */
   help?: string;
+  /** Where an owner measures it, folded away until asked for. */
+  where?: string;
 }
 
 export const fitFields = {
@@ -33,7 +35,7 @@ export const fitFields = {
     step: 1,
     standard: null,
     label: 'Deadrise',
-    help: 'Angle of the bottom against level, at the transom: lay a level across the keel and measure from it to the bottom.',
+    where: 'Angle of the bottom against level, at the transom: lay a level across the keel and measure from it to the bottom.',
   },
   transomAngleDeg: {
     quantity: 'angleDeg',
@@ -42,7 +44,7 @@ export const fitFields = {
     step: 0.5,
     standard: null,
     label: 'Transom angle',
-    help: 'How far the top of the transom leans aft of square to the keel line: hang a plumb line from the top, keel level.',
+    where: 'How far the top of the transom leans aft of square to the keel line: hang a plumb line from the top, keel level.',
   },
   transomHeightMm: {
     quantity: 'lengthMm',
@@ -51,7 +53,7 @@ export const fitFields = {
     step: 5,
     standard: null,
     label: 'Transom height',
-    help: 'From the keel to where the motor clamps, square to the keel line.',
+    where: 'From the keel to where the motor clamps, square to the keel line.',
   },
   loadedMassKg: {
     quantity: 'massKg',
@@ -60,7 +62,7 @@ export const fitFields = {
     step: 20,
     standard: null,
     label: 'Mass as it is run',
-    help: 'Hull, motor, fuel, people and gear together.',
+    help: 'With motor, fuel, people and gear.',
   },
   powerHp: { quantity: 'powerHp', min: 2, max: 600, step: 5, standard: 30, label: 'Power' },
   shaftLengthMm: {
@@ -70,7 +72,7 @@ export const fitFields = {
     step: 5,
     standard: null,
     label: 'Shaft length',
-    help: 'From the clamp to the anti-ventilation plate; most are 381, 508, 635 or 762 mm (15, 20, 25 or 30 in).',
+    where: 'From the clamp to the anti-ventilation plate; most are 381, 508, 635 or 762 mm (15, 20, 25 or 30 in).',
   },
   motorOffsetMm: {
     quantity: 'lengthMm',
@@ -79,7 +81,7 @@ export const fitFields = {
     step: 10,
     standard: 330,
     label: 'Each motor off centre',
-    help: 'Half the distance between the two propeller shafts.',
+    where: 'Half the distance between the two propeller shafts.',
   },
   motorTrimDeg: {
     quantity: 'angleDeg',
@@ -88,7 +90,7 @@ export const fitFields = {
     step: 1,
     standard: 0,
     label: 'Motor trim while scanning',
-    help: '0° with the propeller shaft parallel to the keel line; out and up is positive.',
+    help: '0° with the shaft parallel to the keel; up is positive.',
   },
   steerDeg: {
     quantity: 'angleDeg',
@@ -97,7 +99,7 @@ export const fitFields = {
     step: 1,
     standard: 0,
     label: 'Steering',
-    help: 'Positive turns the nose of the lower unit to starboard.',
+    help: 'Nose of the lower unit to starboard is positive.',
   },
   setbackMm: {
     quantity: 'lengthMm',
@@ -106,7 +108,7 @@ export const fitFields = {
     step: 10,
     standard: 0,
     label: 'Setback',
-    help: 'How far a jack plate or bracket carries the motor aft of the transom.',
+    help: 'By a jack plate or bracket, aft.',
   },
   raiseMm: {
     quantity: 'lengthMm',
@@ -115,7 +117,7 @@ export const fitFields = {
     step: 5,
     standard: 0,
     label: 'Motor raised',
-    help: 'How far the motor is lifted along the transom from resting on its top.',
+    help: 'Along the transom, from resting on its top.',
   },
   housingLengthMm: {
     quantity: 'lengthMm',
@@ -124,7 +126,7 @@ export const fitFields = {
     step: 5,
     standard: 220,
     label: 'Length of the housing',
-    help: 'Of the part in the water, along the boat.',
+    where: 'Of the part in the water, along the boat.',
   },
   offsetMm: {
     quantity: 'lengthMm',
@@ -132,8 +134,8 @@ export const fitFields = {
     max: 2000,
     step: 10,
     standard: 380,
-    label: 'Off centre',
-    help: 'From the keel line to the middle of the sensor; starboard is positive.',
+    label: 'Off centre, to starboard',
+    help: 'To the middle of the sensor; to port is negative.',
   },
   dropMm: {
     quantity: 'lengthMm',
@@ -142,7 +144,7 @@ export const fitFields = {
     step: 1,
     standard: 5,
     label: 'Below the bottom',
-    help: 'Lower leading edge below the bottom right ahead of it, at the set tilt.',
+    where: 'Lower leading edge below the bottom right ahead of it, at the set tilt.',
   },
   standoffMm: {
     quantity: 'lengthMm',
@@ -151,7 +153,17 @@ export const fitFields = {
     step: 5,
     standard: null,
     label: 'Standoff',
-    help: 'From the transom face, or the board, to the leading edge of the housing; the mount’s own where nothing is given.',
+    where: 'From the transom face, or the board, to the leading edge of the housing; the mount’s own where nothing is given.',
+  },
+  localBottomMm: {
+    quantity: 'lengthMm',
+    min: -800,
+    max: 800,
+    step: 5,
+    standard: null,
+    label: 'Bottom at the sensor, below the keel line',
+    help: 'Only for pontoons, catamarans and stepped bottoms; above the keel line is negative.',
+    where: 'With the boat level on its trailer, from the height of the keel at the transom down to the bottom where the sensor goes.',
   },
   boardMm: { quantity: 'lengthMm', min: 0, max: 100, step: 1, standard: 0, label: 'Transom board', help: 'Its thickness; 0 for none.' },
   tiltDeg: {
@@ -161,17 +173,16 @@ export const fitFields = {
     step: 0.5,
     standard: null,
     label: 'Tilt against the keel line',
-    help: 'Nose-up, which is heel-down, is positive.',
+    help: 'Nose-up (heel-down) is positive.',
   },
-  scanKn: { quantity: 'speedKn', min: 0, max: 60, step: 0.5, standard: 4, label: 'Scanning', help: 'Through the water.' },
+  scanKn: { quantity: 'speedKn', min: 0, max: 60, step: 0.5, standard: 4, label: 'Scanning speed' },
   cruiseKn: {
     quantity: 'speedKn',
     min: 0,
     max: 80,
     step: 1,
     standard: null,
-    label: 'Cruising',
-    help: 'The picture is worked out for this speed too.',
+    label: 'Cruising speed',
   },
   cruiseMotorTrimDeg: {
     quantity: 'angleDeg',
@@ -180,7 +191,6 @@ export const fitFields = {
     step: 1,
     standard: null,
     label: 'Motor trim while cruising',
-    help: 'The same as while scanning where nothing is given.',
   },
   measuredTrimDeg: {
     quantity: 'angleDeg',
@@ -189,7 +199,7 @@ export const fitFields = {
     step: 0.5,
     standard: null,
     label: 'Running angle you measured',
-    help: 'At the scanning speed, bow up positive, less what the level read on the trailer with the keel level.',
+    where: 'At the scanning speed, bow up positive, less what the level read on the trailer with the keel level.',
   },
   targetDeg: {
     quantity: 'angleDeg',
@@ -198,7 +208,7 @@ export const fitFields = {
     step: 0.5,
     standard: 0,
     label: 'Wanted attitude in the water',
-    help: '0° holds the sensor level at the scanning speed; nose-up is positive.',
+    help: '0° is level at the scanning speed; nose-up is positive.',
   },
 } as const satisfies Record<string, FitField>;
 

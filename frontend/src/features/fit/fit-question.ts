@@ -26,6 +26,7 @@ export function fitQuestionOf(state: FitState): FitQuestion {
       rollDeg: 0,
       yawDeg: 0,
       ...known('standoffMm', state.standoffMm),
+      ...known('localBottomMm', state.localBottomMm),
       ...known('tiltDeg', state.tiltDeg),
     },
     running: {

@@ -30,13 +30,14 @@ export function fitScene(state: FitState, parts: ResolvedParts, tiltDeg: number,
     rollDeg: 0,
     yawDeg: 0,
     ...(state.standoffMm !== null && { standoffMm: state.standoffMm }),
+    ...(state.localBottomMm !== null && { localBottomMm: state.localBottomMm }),
   };
   const prepared = prepare(parts, placing, engines, [], state.loadedMassKg ?? undefined);
   const numbers = middleNumbers(prepared);
   const { solids, poseAt } = sceneOf(prepared, numbers);
   const { transducer, hull } = parts;
   return {
-    hull: hullShape(numbers.hull),
+    hull: hullShape(numbers.hull, state.localBottomMm ?? undefined),
     beamM: hull.beamM ?? Math.max(usualBeam(hull.lengthM).value, numbers.hull.chineBeamM),
     solids: solids.filter(({ owner }) => owner.part !== 'hull'),
     sensor: {

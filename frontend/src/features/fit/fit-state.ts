@@ -59,3 +59,8 @@ export const standardState: FitState = {
   water: fitChoices.water.standard,
   wanted: fitChoices.wanted.standard,
 };
+
+/** True where one of these has been set to something else than what stands there by itself. */
+export function isSet(state: FitState, names: readonly (keyof FitState)[]): boolean {
+  return names.some((name) => state[name] !== standardState[name]);
+}

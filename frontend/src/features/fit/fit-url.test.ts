@@ -46,7 +46,7 @@ describe('the check in the address', () => {
     expect(state.offsetMm).toBe(standardState.offsetMm);
     expect(state.dropMm).toBe(8);
     expect(state.hull).toBe('hul_01');
-    expect(refused).toEqual([{ name: 'offsetMm', message: 'Off centre: “banana” is not a number; 380\u00a0mm is used.' }]);
+    expect(refused).toEqual([{ name: 'offsetMm', message: 'Off centre, to starboard: “banana” is not a number; 380\u00a0mm is used.' }]);
   });
 
   it.each(['', ' 5', '5,5', '0x10', '1e3', 'NaN', 'Infinity', '--5', '5.', '99999999'])('refuses “%s” as a number', (raw) => {

@@ -10,7 +10,7 @@ export function stateOfQuestion(question: FitQuestionInput): { state: FitState; 
   readMotors(question, state, unread);
   readSensor(question, state, unread);
   const { placement, running } = question;
-  Object.assign(state, pick(placement, ['offsetMm', 'dropMm', 'boardMm', 'standoffMm', 'tiltDeg']));
+  Object.assign(state, pick(placement, ['offsetMm', 'dropMm', 'boardMm', 'standoffMm', 'localBottomMm', 'tiltDeg']));
   if (placement.bracketSettingDeg !== undefined) unread.push('placement.bracketSettingDeg');
   if (placement.forwardMm !== undefined) unread.push('placement.forwardMm');
   if (placement.rollDeg) unread.push('placement.rollDeg');

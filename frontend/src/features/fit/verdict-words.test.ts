@@ -35,6 +35,12 @@ describe('the head of the answer', () => {
     expect(greatestHider(picture, standardState)).toBe('strut');
   });
 
+  it('takes what hides before what only thins', () => {
+    const thinned: Sector = { ...sector('strut', 0.4), kind: 'thinned' };
+    expect(greatestHider(side(0.5, [thinned, sector('torpedo', 0.2)]), standardState)).toBe('torpedo');
+    expect(greatestHider(side(0.9, [thinned]), standardState)).toBe('strut');
+  });
+
   it('names the motor where there are two', () => {
     expect(say(side(1), side(0.7, [sector('skeg', 0.3, 1)]), { motors: 'two' })).toBe(
       'The starboard side is partly hidden by the skeg of the starboard motor.',

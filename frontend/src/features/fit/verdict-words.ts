@@ -49,10 +49,11 @@ function lossWords({ clearShare }: SideAnswer): string {
   return `${formatShare(1 - clearShare)} lost`;
 }
 
-/** The part that takes most of a side's picture, with its motor's name where there are two; null where no sector is named. */
+/** The part that hides most of a side's picture, or thins it where nothing is hidden, with its motor's name where there are two. */
 export function greatestHider({ sectors }: SideAnswer, state: Pick<FitState, 'motors'>): string | null {
   const shares = new Map<string, number>();
-  for (const { by, share } of sectors) {
+  const hidden = sectors.filter(({ kind }) => kind === 'hidden');
+  for (const { by, share } of hidden.length > 0 ? hidden : sectors) {
     const name = hiderWords(by, state);
     shares.set(name, (shares.get(name) ?? 0) + share);
   }
@@ -64,4 +65,11 @@ export function greatestHider({ sectors }: SideAnswer, state: Pick<FitState, 'mo
 export function sideWords({ verdict, clearShare }: SideAnswer): string {
   if (verdict === 'clear' && clearShare === 1) return 'all clear';
   return `${formatShare(clearShare)} clear`;
+}
+
+/** "port 59 % clear, starboard all clear" */
+export function sidesInShort(state: Pick<FitState, 'wanted'>, clearance: ClearanceAnswer): string {
+  return wantedSides(state, clearance)
+    .map(([name, side]) => `${name} ${sideWords(side)}`)
+    .join(', ');
 }

@@ -3,9 +3,9 @@ import { hullFormWords } from '../../../lib/form-words.ts';
 import { formatQuantity } from '../../../lib/format-units.ts';
 import { paths } from '../../../lib/paths.ts';
 import { useUnits } from '../../../lib/unit-choice.ts';
-import { hullForms } from '../fit-state.ts';
+import { hullForms, isSet } from '../fit-state.ts';
 import { FitNumber } from './fit-number.tsx';
-import { InputSheet } from './input-sheet.tsx';
+import { InputSheet, MoreInputs } from './input-sheet.tsx';
 import type { InputsProps } from './inputs-props.ts';
 import { PartPicker } from './part-picker.tsx';
 
@@ -31,11 +31,17 @@ export function BoatInputs({ state, change, names }: InputsProps) {
           onChange={(form) => change({ form })}
         />
         <FitNumber name="lengthM" {...number} />
-        <FitNumber name="deadriseDeg" {...number} />
-        <FitNumber name="transomAngleDeg" {...number} />
-        <FitNumber name="transomHeightMm" {...number} />
       </PartPicker>
-      <FitNumber name="loadedMassKg" {...number} />
+      <MoreInputs title="What you know of it" set={isSet(state, ['deadriseDeg', 'transomAngleDeg', 'transomHeightMm', 'loadedMassKg'])}>
+        {state.hull === null && (
+          <>
+            <FitNumber name="deadriseDeg" {...number} />
+            <FitNumber name="transomAngleDeg" {...number} />
+            <FitNumber name="transomHeightMm" {...number} />
+          </>
+        )}
+        <FitNumber name="loadedMassKg" {...number} />
+      </MoreInputs>
     </InputSheet>
   );
 }

@@ -83,8 +83,11 @@ function PassingBy({ name, side: { leastClearanceMm, diffractionMarginMm } }: { 
   const units = useUnits();
   if (leastClearanceMm === null || leastClearanceMm === 0) return null;
   const passes = `To ${name} the beam passes the nearest part by ${formatQuantity(leastClearanceMm, 'lengthMm', units)}`;
+  // Under a millimetre the margin is nothing anyone could keep to.
   const margin =
-    diffractionMarginMm === null ? '' : `; within ${formatQuantity(diffractionMarginMm, 'lengthMm', units)} its edge is disturbed`;
+    diffractionMarginMm === null || diffractionMarginMm < 1
+      ? ''
+      : `; within ${formatQuantity(diffractionMarginMm, 'lengthMm', units)} its edge is disturbed`;
   return (
     <p className="text-note text-ink-2">
       {passes}

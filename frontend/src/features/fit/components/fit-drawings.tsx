@@ -5,12 +5,14 @@ import { useMemo } from 'react';
 import { AboveDrawing } from '../../../drawings/above-drawing.tsx';
 import { AsternDrawing } from '../../../drawings/astern-drawing.tsx';
 import { SideDrawing } from '../../../drawings/side-drawing.tsx';
-import { formatQuantity, formatTilt } from '../../../lib/format-units.ts';
+import { formatQuantity } from '../../../lib/format-units.ts';
 import { useUnits } from '../../../lib/unit-choice.ts';
 import { fitFields } from '../fit-fields.ts';
 import { fitScene } from '../fit-scene.ts';
 import type { FitState } from '../fit-state.ts';
 import { sceneWords } from '../scene-words.ts';
+import { sidesInShort } from '../verdict-words.ts';
+import { waterWords } from './tilt-section.tsx';
 
 interface DrawingProps {
   state: FitState;
@@ -35,9 +37,12 @@ export function FitAstern({ change, ...props }: DrawingProps & { change: (change
     <AsternDrawing
       scene={scene}
       alternative={sceneWords(props.state, scene)}
+      {...(props.answer && { outcome: sidesInShort(props.state, props.answer.clearance) })}
       lengthText={(mm) => formatQuantity(mm, 'lengthMm', units)}
       stale={props.stale}
       maxHeightPx={560}
+      // On a phone it stays in sight while the inputs below are moved, if the screen is tall enough for both.
+      className="bg-sheet max-desk:border-b max-desk:border-rule max-desk:[@media(min-height:42rem)]:sticky max-desk:top-0 max-desk:z-[5]"
       onMoveSensor={(offsetM) => change({ offsetMm: Math.min(max, Math.max(min, Math.round((offsetM * 1000) / step) * step)) })}
     />
   );
@@ -51,15 +56,14 @@ export function FitSideAndAbove(props: DrawingProps) {
   const lengthText = (mm: number) => formatQuantity(mm, 'lengthMm', units);
   const speed = formatQuantity(state.scanKn, 'speedKn', units);
   return (
-    <div className="grid border-t border-rule tablet:grid-cols-2 tablet:divide-x tablet:divide-rule">
+    <div className="relative z-10 grid border-t border-rule bg-sheet max-desk:order-5 tablet:grid-cols-2 tablet:divide-x tablet:divide-rule">
       {answer && (
         <SideDrawing
           scene={scene}
           trimRad={degToRad(answer.trim.valueDeg)}
           title={`From the side, at ${speed}`}
-          alternative={`From port at ${speed}: the boat runs at ${formatQuantity(answer.trim.valueDeg, 'angleDeg', units)}, bow up positive; the sensor stands ${formatTilt(answer.tilt.attitudeDeg)} in the water.`}
+          alternative={`From port at ${speed}: the boat runs at ${formatQuantity(answer.trim.valueDeg, 'angleDeg', units)}, bow up positive; the sensor stands ${waterWords(answer.tilt.attitudeDeg)} in the water.`}
           lengthText={lengthText}
-          tiltText={formatTilt}
           stale={stale}
           maxHeightPx={360}
         />

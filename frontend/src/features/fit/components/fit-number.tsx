@@ -16,7 +16,7 @@ interface FitNumberProps {
 /** One number of the check with its plus and minus, its range and its "where do I measure this?". */
 export function FitNumber({ name, state, change, placeholder, slider = false }: FitNumberProps) {
   const { quantity, min, max, step, standard, label, ...rest } = fitFields[name];
-  const help = 'help' in rest ? rest.help : undefined;
+  const { help, where }: { help?: string; where?: string } = rest;
   const value = state[name];
   const blank = standard === null;
   const set = (next: number | null) => change({ [name]: next ?? standard } as Partial<FitState>);
@@ -24,7 +24,8 @@ export function FitNumber({ name, state, change, placeholder, slider = false }: 
     <div className="flex flex-col gap-1">
       <UnitInput
         label={label}
-        where={help}
+        help={help}
+        where={where}
         quantity={quantity}
         value={value}
         onChange={set}

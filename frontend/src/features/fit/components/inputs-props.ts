@@ -8,4 +8,6 @@ export interface InputsProps {
   names: Readonly<Partial<Record<FitPartName, string>>>;
   /** The tilt of the last answer, to start from when it is set by hand. */
   neededDeg: number | null;
+  /** Codes of the last answer's reasons: an input that would settle one of them is shown unfolded. */
+  reasons: readonly string[];
 }

@@ -2,9 +2,9 @@ import { ChoiceRow } from '../../../components/ui/select.tsx';
 import { formatQuantity } from '../../../lib/format-units.ts';
 import { paths } from '../../../lib/paths.ts';
 import { useUnits } from '../../../lib/unit-choice.ts';
-import { type MotorCount, motorCounts } from '../fit-state.ts';
+import { isSet, type MotorCount, motorCounts } from '../fit-state.ts';
 import { FitNumber } from './fit-number.tsx';
-import { InputSheet } from './input-sheet.tsx';
+import { InputSheet, MoreInputs } from './input-sheet.tsx';
 import type { InputsProps } from './inputs-props.ts';
 import { PartPicker } from './part-picker.tsx';
 
@@ -40,12 +40,14 @@ export function MotorInputs({ state, change, names }: InputsProps) {
             without="Describe it instead"
           >
             <FitNumber name="powerHp" {...number} />
-            <FitNumber name="shaftLengthMm" {...number} />
           </PartPicker>
           {state.motors === 'two' && <FitNumber name="motorOffsetMm" {...number} />}
-          <FitNumber name="steerDeg" {...number} />
-          <FitNumber name="setbackMm" {...number} />
-          <FitNumber name="raiseMm" {...number} />
+          <MoreInputs title="How it is hung and steered" set={isSet(state, ['shaftLengthMm', 'steerDeg', 'setbackMm', 'raiseMm'])}>
+            {state.motor === null && <FitNumber name="shaftLengthMm" {...number} />}
+            <FitNumber name="steerDeg" {...number} />
+            <FitNumber name="setbackMm" {...number} />
+            <FitNumber name="raiseMm" {...number} />
+          </MoreInputs>
         </>
       )}
     </InputSheet>

@@ -37,20 +37,20 @@ export function PartPicker({ kind, label, id, name, sheet, onChange, without, ch
     <div className="flex flex-col gap-3">
       {id !== null && (
         <p>
-          <span className="block font-firm">{label}</span>
+          {kind !== 'hull' && <span className="block font-firm">{label}</span>}
           <Link to={sheet(id)} className="inline-flex min-h-11 items-center">
             {name ?? 'Its sheet'}
           </Link>
         </p>
       )}
-      {id === null && children}
       <div className="flex flex-wrap gap-2">
         <Button aria-expanded={open} onClick={() => setOpen(!open)}>
-          {id === null ? `Choose from the catalog` : 'Choose another'}
+          {id === null ? `${label} from the catalog` : 'Choose another'}
         </Button>
         {id !== null && <Button onClick={() => choose(null)}>{without}</Button>}
       </div>
       {open && <Finder kind={kind} label={label} onChoose={choose} />}
+      {id === null && children}
     </div>
   );
 }

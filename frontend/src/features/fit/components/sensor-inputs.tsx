@@ -3,13 +3,13 @@ import { ChoiceRow } from '../../../components/ui/select.tsx';
 import { formatQuantity } from '../../../lib/format-units.ts';
 import { paths } from '../../../lib/paths.ts';
 import { useUnits } from '../../../lib/unit-choice.ts';
-import { sidesWanted } from '../fit-state.ts';
+import { isSet, sidesWanted } from '../fit-state.ts';
 import { FitNumber } from './fit-number.tsx';
-import { InputSheet } from './input-sheet.tsx';
+import { InputSheet, MoreInputs } from './input-sheet.tsx';
 import type { InputsProps } from './inputs-props.ts';
 import { PartPicker } from './part-picker.tsx';
 
-export function PlaceInputs({ state, change, neededDeg }: InputsProps) {
+export function PlaceInputs({ state, change, neededDeg, reasons }: InputsProps) {
   const units = useUnits();
   const number = { state, change };
   const side = state.offsetMm < 0 ? 'to port' : 'to starboard';
@@ -19,6 +19,7 @@ export function PlaceInputs({ state, change, neededDeg }: InputsProps) {
       <FitNumber name="offsetMm" slider {...number} />
       <Button onClick={() => change({ offsetMm: -state.offsetMm })}>Move to the other side</Button>
       <FitNumber name="dropMm" {...number} />
+      {(state.localBottomMm !== null || reasons.includes('local-bottom-unknown')) && <FitNumber name="localBottomMm" {...number} />}
       <ChoiceRow
         legend="Tilt"
         name="tilt"
@@ -31,8 +32,10 @@ export function PlaceInputs({ state, change, neededDeg }: InputsProps) {
         onChange={(how) => change({ tiltDeg: how === 'needed' ? null : Math.round(Math.min(30, Math.max(-30, neededDeg ?? 0)) * 2) / 2 })}
       />
       {state.tiltDeg !== null && <FitNumber name="tiltDeg" slider {...number} />}
-      <FitNumber name="standoffMm" placeholder="the mount’s own" {...number} />
-      <FitNumber name="boardMm" {...number} />
+      <MoreInputs title="Standoff and board" set={isSet(state, ['standoffMm', 'boardMm'])}>
+        <FitNumber name="standoffMm" placeholder="the mount’s own" {...number} />
+        <FitNumber name="boardMm" {...number} />
+      </MoreInputs>
     </InputSheet>
   );
 }
