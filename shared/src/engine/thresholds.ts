@@ -4,6 +4,10 @@
 export const clearFrom = 0.99;
 export const shadedFrom = 0.85;
 
+/** A side counts as surely clear from this probability upward, and as surely blocked from the second (our judgement). */
+export const sureFrom = 0.9;
+export const surelyBlockedFrom = 0.8;
+
 /** A direction is hidden where more than this share of its slab is blocked, thinned between the two (our judgement). */
 export const hiddenAbove = 0.5;
 export const thinnedFrom = 0.1;

@@ -27,7 +27,7 @@ export function answerClearance(question: ClearanceQuestion, parts: ClearancePar
   return {
     ...(question.ref === undefined ? {} : { ref: question.ref }),
     ...rounded({
-      clearance: clearanceAnswer(sides, window),
+      clearance: clearanceAnswer(sides, window, null),
       assumptions: used,
       cautions: cautions.map((code) => coded(cautionCodes, code)),
     }),

@@ -3,7 +3,7 @@ import { type CautionCode, cautionCodes, coded } from '../engine/codes.ts';
 import { engineVersion } from '../engine/version.ts';
 import type { Assumption } from '../schemas/answer.ts';
 import type { TiltQuestion, TiltReply } from '../schemas/tilt.ts';
-import { trimFor, trimPointsOf } from './evaluate.ts';
+import { trimPointsOf, widenedTrim } from './evaluate.ts';
 import { fillTiltScale, standsOnTransom } from './fill-sensor.ts';
 import type { AnswerContext, TiltParts } from './parts.ts';
 import { middleNumbers, prepare } from './prepare.ts';
@@ -22,7 +22,7 @@ export function answerTilt(question: TiltQuestion, parts: TiltParts, context: An
   const n = middleNumbers(p);
   const { measuredTrimDeg, measuredSigmaDeg } = question;
   const own = measuredTrimDeg === undefined ? null : { trimDeg: measuredTrimDeg, sigmaDeg: measuredSigmaDeg ?? 0.5 };
-  const trim = trimAnswer(trimFor(p, n, { speedKn: question.speedKn, water: question.water, own }, trimPointsOf(p, null)));
+  const trim = trimAnswer(widenedTrim(p, n, { speedKn: question.speedKn, water: question.water, own }, trimPointsOf(p, null)));
   const assumptions: Assumption[] = own ? [] : p.assumptions.filter(({ field }) => !geometryOnly.has(field));
   const onTransom = mount !== undefined && standsOnTransom(mount, undefined);
   const scale = onTransom ? { transomAngleDeg: n.hull.transomAngleDeg, ...fillTiltScale(mount, assumptions) } : null;

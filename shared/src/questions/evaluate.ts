@@ -2,7 +2,7 @@
 
 import type { Side } from '../engine/beams/fan.ts';
 import { type SideClearance, sideClearance, type TiltWindow, tiltWindow } from '../engine/beams/occlusion.ts';
-import type { Estimate } from '../engine/estimate.ts';
+import { addInQuadrature, type Estimate } from '../engine/estimate.ts';
 import type { Pose } from '../engine/frames.ts';
 import { legPose, propCentreM } from '../engine/lower-unit.ts';
 import { type Engine, sceneSolids } from '../engine/scene.ts';
@@ -65,6 +65,22 @@ export function trimFor(p: Prepared, n: FitNumbers, running: Running, points: re
     own,
     points,
   });
+}
+
+/** Inputs of a hull whose spread widens the trim. */
+const wideningFields = ['loadedMassKg', 'lcgM', 'vcgM', 'chineBeamM', 'deadriseDeg', 'staticTrimDeg'] as const;
+
+/** The same with the spread of the hull's own figures added, each moved by one standard deviation (first order). */
+export function widenedTrim(p: Prepared, n: FitNumbers, running: Running, points: readonly TrimPoint[]): Estimate<TrimBasis, TrimFlag> {
+  const middle = trimFor(p, n, running, points);
+  if (running.own || middle.basis === 'class') return middle;
+  const moves = wideningFields.map((field) => {
+    const { value, sigma } = p.hull[field];
+    if (!(sigma > 0)) return 0;
+    const moved = trimFor(p, { ...n, hull: { ...n.hull, [field]: value + sigma } }, running, points);
+    return moved.basis === 'class' ? 0 : moved.value - middle.value;
+  });
+  return { ...middle, sigma: addInQuadrature(middle.sigma, ...moves) };
 }
 
 /** Everything a beam can meet, and the sensor's pose at any tilt. */

@@ -3,7 +3,7 @@ import { fanOf, type Side } from '../engine/beams/fan.ts';
 import { clearShare } from '../engine/beams/sectors.ts';
 import { castSlab } from '../engine/beams/slab.ts';
 import { motorTrimReach } from '../engine/lower-unit.ts';
-import { type SideVerdict, sideVerdict } from '../engine/thresholds.ts';
+import { clearFrom, shadedFrom } from '../engine/thresholds.ts';
 import { degToRad, radToDeg } from '../engine/units.ts';
 import * as input from '../engine-input.ts';
 import { type BothSides, enginesOf, sceneOf } from './evaluate.ts';
@@ -17,6 +17,8 @@ export interface Reach {
   clearByMotorTrim: boolean;
   /** The wanted sides clear at another tilt within reach. */
   clearByTilt: boolean;
+  /** The setting that leaves the wanted sides most open; null where nothing was looked for. */
+  best: { numbers: FitNumbers; tiltDeg: number } | null;
 }
 
 const trimSteps = 6;
@@ -33,23 +35,29 @@ export function reachOf(
   scale: TiltScale | null,
 ): Reach {
   if (!sides || wanted.every((side) => sides[side].verdict === 'clear'))
-    return { unblocked: true, clearByMotorTrim: false, clearByTilt: false };
+    return { unblocked: true, clearByMotorTrim: false, clearByTilt: false, best: null };
   const tilts = tiltRange(scale);
   const [least, greatest] = tilts;
   const clearByTilt = nearestClearDeg !== null && nearestClearDeg >= least && nearestClearDeg <= greatest;
   const trims = trimSettings(p, n);
-  const worst = (trimShare: number, tiltDeg: number) => worstVerdict(p, atTrim(n, trims, trimShare), tiltDeg, wanted);
+  const openness = (trimShare: number, tiltDeg: number) => leastShare(p, atTrim(n, trims, trimShare), tiltDeg, wanted);
   const shares = Array.from({ length: trimSteps + 1 }, (_, i) => i / trimSteps);
-  const clearByMotorTrim = trims.length > 0 && shares.some((share) => goesUp(n, trims, share) && worst(share, setDeg) === 'clear');
-  const settings = shares.flatMap((share) =>
-    Array.from({ length: tiltSteps + 1 }, (_, i) => [share, least + ((greatest - least) * i) / tiltSteps] as const),
-  );
-  const unblocked =
-    clearByTilt ||
-    clearByMotorTrim ||
-    wanted.every((side) => sides[side].verdict !== 'blocked') ||
-    settings.some(([share, tiltDeg]) => worst(share, tiltDeg) !== 'blocked');
-  return { unblocked, clearByMotorTrim, clearByTilt };
+  const clearByMotorTrim = trims.length > 0 && shares.some((share) => goesUp(n, trims, share) && openness(share, setDeg) >= clearFrom);
+  if (clearByTilt || clearByMotorTrim || wanted.every((side) => sides[side].verdict !== 'blocked')) {
+    return { unblocked: true, clearByMotorTrim, clearByTilt, best: null };
+  }
+  let most = Math.min(...wanted.map((side) => sides[side].clearShare));
+  let best = { numbers: n, tiltDeg: setDeg };
+  for (const share of trims.length > 0 ? shares : [0]) {
+    for (let i = 0; i <= tiltSteps; i++) {
+      const tiltDeg = least + ((greatest - least) * i) / tiltSteps;
+      const open = openness(share, tiltDeg);
+      if (open <= most) continue;
+      most = open;
+      best = { numbers: atTrim(n, trims, share), tiltDeg };
+    }
+  }
+  return { unblocked: most >= shadedFrom, clearByMotorTrim, clearByTilt, best };
 }
 
 /** Tilts against the keel line that the bracket can be set to; ±20° where none is named. */
@@ -86,11 +94,10 @@ function goesUp(n: FitNumbers, trims: readonly TrimSetting[], share: number): bo
   return atTrim(n, trims, share).engines.some((engine, i) => engine.motorTrimDeg > (n.engines[i] as { motorTrimDeg: number }).motorTrimDeg);
 }
 
-function worstVerdict(p: Prepared, n: FitNumbers, tiltDeg: number, wanted: readonly Side[]): SideVerdict {
+function leastShare(p: Prepared, n: FitNumbers, tiltDeg: number, wanted: readonly Side[]): number {
   const scene = sceneOf(p, n);
   const element = input.sideElement(p.parts.transducer, n.transducer);
   const fan = fanOf(element);
   const sensor = scene.poseAt(degToRad(tiltDeg));
-  const shares = wanted.map((side) => clearShare(fan, castSlab(scene.solids, sensor, element, fan, side).blocked));
-  return sideVerdict(Math.min(...shares));
+  return Math.min(...wanted.map((side) => clearShare(fan, castSlab(scene.solids, sensor, element, fan, side).blocked)));
 }

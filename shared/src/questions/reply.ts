@@ -10,6 +10,7 @@ import { mToMm, radToDeg } from '../engine/units.ts';
 import type { ClearanceAnswer, SideAnswer, TiltAnswer, TrimAnswer } from '../schemas/answer.ts';
 import type { WantedSides } from '../schemas/fit.ts';
 import type { BothSides } from './evaluate.ts';
+import type { SideOdds } from './sampling.ts';
 
 /** Answers carry six decimals: far below any measurement, and the same on every machine. */
 export function rounded<T>(value: T): T {
@@ -34,10 +35,16 @@ export interface TiltScale {
 }
 
 /** Tilt, attitude and bracket setting. `setDeg` null takes the needed tilt; `scale` null where no bracket stands on a transom. */
-export function tiltAnswer(trimDeg: number, targetDeg: number, setDeg: number | null, scale: TiltScale | null): TiltAnswer {
+export function tiltAnswer(
+  trimDeg: number,
+  targetDeg: number,
+  setDeg: number | null,
+  scale: TiltScale | null,
+  interval90Deg: [number, number] | null = null,
+): TiltAnswer {
   const neededDeg = targetDeg - trimDeg;
   const set = setDeg ?? neededDeg;
-  const base = { neededDeg, interval90Deg: null, setDeg: set, attitudeDeg: set + trimDeg };
+  const base = { neededDeg, interval90Deg, setDeg: set, attitudeDeg: set + trimDeg };
   if (!scale) return { ...base, bracketSettingDeg: null, inBracketRange: null, wedgeDeg: null, shimMmPer100: null };
   const setting = neededDeg - scale.transomAngleDeg - scale.zeroDeg;
   const wedgeDeg = setting > scale.maxDeg ? setting - scale.maxDeg : Math.min(0, setting - scale.minDeg);
@@ -50,21 +57,21 @@ export function tiltAnswer(trimDeg: number, targetDeg: number, setDeg: number | 
   };
 }
 
-export function sideAnswer(side: SideClearance): SideAnswer {
+export function sideAnswer(side: SideClearance, odds: SideOdds | null): SideAnswer {
   return {
     verdict: side.verdict,
     clearShare: side.clearShare,
-    probabilityClear: null,
+    probabilityClear: odds?.probabilityClear ?? null,
     sectors: side.sectors,
     leastClearanceMm: side.leastClearanceM === null ? null : mToMm(side.leastClearanceM),
     diffractionMarginMm: side.diffractionMarginM === null ? null : mToMm(side.diffractionMarginM),
   };
 }
 
-export function clearanceAnswer(sides: BothSides | null, window: TiltWindow | null): ClearanceAnswer {
+export function clearanceAnswer(sides: BothSides | null, window: TiltWindow | null, odds: Record<Side, SideOdds> | null): ClearanceAnswer {
   return {
-    port: sides && sideAnswer(sides.port),
-    starboard: sides && sideAnswer(sides.starboard),
+    port: sides && sideAnswer(sides.port, odds?.port ?? null),
+    starboard: sides && sideAnswer(sides.starboard, odds?.starboard ?? null),
     tiltWindowDeg: window?.windowRad ? [radToDeg(window.windowRad[0]), radToDeg(window.windowRad[1])] : null,
     nearestClearTiltDeg: window?.nearestClearRad == null ? null : radToDeg(window.nearestClearRad),
   };
