@@ -6,11 +6,13 @@ import * as access from './schema/access.ts';
 import * as catalog from './schema/catalog.ts';
 import * as importWork from './schema/import-work.ts';
 import * as imports from './schema/imports.ts';
+import * as limits from './schema/limits.ts';
 import * as mail from './schema/mail.ts';
 import * as outbox from './schema/outbox.ts';
 import * as people from './schema/people.ts';
+import * as savedFits from './schema/saved-fits.ts';
 
-export const schema = { ...catalog, ...people, ...imports, ...importWork, ...outbox, ...access, ...mail };
+export const schema = { ...catalog, ...people, ...imports, ...importWork, ...outbox, ...access, ...mail, ...limits, ...savedFits };
 export type Db = BetterSQLite3Database<typeof schema> & { $client: Database.Database };
 
 /** Opens (and makes, where missing) the database file; `:memory:` for tests that need no file. */

@@ -38,6 +38,13 @@ export const apiKeys = sqliteTable(
     /** SHA-256 of the secret; 256 random bits need no slow hash. */
     secretHash: text('secret_hash').notNull(),
     scopes: text('scopes', { mode: 'json' }).$type<Scope[]>().notNull(),
+    kind: text('kind').$type<'server' | 'browser'>().notNull().default('server'),
+    /** Origins of the pages that may use a browser key. */
+    origins: text('origins', { mode: 'json' }).$type<string[]>().notNull().default([]),
+    /** The secret before the last rotation, good until `previousUntil`. */
+    previousHash: text('previous_hash'),
+    previousUntil: text('previous_until'),
+    expiresAt: text('expires_at'),
     createdAt: text('created_at').notNull(),
     lastUsedAt: text('last_used_at'),
     revokedAt: text('revoked_at'),
@@ -57,7 +64,11 @@ export const boats = sqliteTable(
     hullId: text('hull_id'),
     /** The rig, as the question it asks. */
     question: text('question', { mode: 'json' }).$type<FitQuestion>().notNull(),
+    /** Grows by one with each change; its ETag. */
+    revision: integer('revision').notNull().default(1),
     createdAt: text('created_at').notNull(),
+    /** Empty where it was never changed. */
+    updatedAt: text('updated_at').notNull().default(''),
   },
   (table) => [index('boats_user').on(table.userId), check('boats_question', sql.raw('json_valid(question)'))],
 );
