@@ -24,16 +24,22 @@ const idOf = async (page: Page, query: string): Promise<string> => {
   return ((await answer.json()) as { data: { id: string }[] }).data[0]!.id;
 };
 const go = (at: string) => (page: Page) => page.goto(`${address}${at}`);
-const sheet = (kind: string, query: string) => async (page: Page) => page.goto(`${address}/${kind}/${await idOf(page, `${kind}?${query}`)}`);
+const sheet = (kind: string, query: string) => async (page: Page) =>
+  page.goto(`${address}/${kind}/${await idOf(page, `${kind}?${query}`)}`);
 
 async function storyFit(page: Page, index: number) {
   await page.goto(address);
-  await page.getByRole('link', { name: /story|check|Tansy|Bellwether|Duckboard/i }).nth(index).click();
+  await page
+    .getByRole('link', { name: /story|check|Tansy|Bellwether|Duckboard/i })
+    .nth(index)
+    .click();
 }
 
 async function uploaded(page: Page) {
   const table = 'maker,model,form,length_m,deadrise_deg\nAlderwick,Moorhen 46,modified-v,4.6,17\nAlderwick,Moorhen 60,modified-v,6,steep\n';
-  const created = await page.request.post(`${address}/api/v1/imports`, { multipart: { table: 'hulls', file: { name: 'alderwick.csv', mimeType: 'text/csv', buffer: Buffer.from(table) } } });
+  const created = await page.request.post(`${address}/api/v1/imports`, {
+    multipart: { table: 'hulls', file: { name: 'alderwick.csv', mimeType: 'text/csv', buffer: Buffer.from(table) } },
+  });
   const { id } = (await created.json()) as { id: string };
   await page.request.post(`${address}/api/v1/imports/${id}/check`);
   await page.goto(`${address}/steward/imports/${id}`);
@@ -41,8 +47,20 @@ async function uploaded(page: Page) {
 
 const screens: Screen[] = [
   { name: 'home', open: go('/') },
-  { name: 'home-search', open: async (page) => { await page.goto(address); await page.getByRole('searchbox').or(page.getByRole('combobox')).first().fill('redcuter'); } },
-  { name: 'home-nothing', open: async (page) => { await page.goto(address); await page.getByRole('searchbox').or(page.getByRole('combobox')).first().fill('xqzzkv'); } },
+  {
+    name: 'home-search',
+    open: async (page) => {
+      await page.goto(address);
+      await page.getByRole('searchbox').or(page.getByRole('combobox')).first().fill('redcuter');
+    },
+  },
+  {
+    name: 'home-nothing',
+    open: async (page) => {
+      await page.goto(address);
+      await page.getByRole('searchbox').or(page.getByRole('combobox')).first().fill('xqzzkv');
+    },
+  },
   { name: 'home-customer', as: 'customer', open: go('/') },
   { name: 'hull', open: sheet('hulls', 'q=reedcutter 14') },
   { name: 'hull-generic', open: sheet('hulls', 'q=generic flat&generic=true') },
@@ -85,12 +103,34 @@ async function takeAll(browser: Browser) {
 
 async function main() {
   mkdirSync(folder, { recursive: true });
-  const server = process.argv[3] ? undefined : spawn(process.execPath, [path.join(import.meta.dirname, 'serve-fresh.mjs')], { env: { ...process.env, PORT: String(own) }, stdio: 'ignore' });
+  const server = process.argv[3]
+    ? undefined
+    : spawn(process.execPath, [path.join(import.meta.dirname, 'serve-fresh.mjs')], {
+        env: { ...process.env, PORT: String(own) },
+        stdio: 'ignore',
+      });
   try {
-    for (let tries = 0; tries < 100 && !(await fetch(`${address}/readyz`).then((r) => r.ok, () => false)); tries++) await new Promise((resolve) => setTimeout(resolve, 200));
+    for (
+      let tries = 0;
+      tries < 100 &&
+      !(await fetch(`${address}/readyz`).then(
+        (r) => r.ok,
+        () => false,
+      ));
+      tries++
+    )
+      await new Promise((resolve) => setTimeout(resolve, 200));
     const browser = await chromium.launch({
       executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium',
-      args: ['--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update', '--disable-sync'],
+      args: [
+        '--no-sandbox',
+        '--disable-gpu',
+        '--disable-quic',
+        '--no-first-run',
+        '--disable-background-networking',
+        '--disable-component-update',
+        '--disable-sync',
+      ],
     });
     await takeAll(browser);
     await browser.close();

@@ -10,7 +10,7 @@ import { createApp } from '../../backend/src/app.ts';
 import { type Config, readConfig } from '../../backend/src/config.ts';
 import { connect, type Db, databaseFile } from '../../backend/src/db/connect.ts';
 import { demoPassword } from '../../backend/src/db/seed.ts';
-import { catalogSearch } from '../../backend/src/resources/search/search-catalog.ts';
+import { createDeps } from '../../backend/src/deps.ts';
 import { Problem, type ProblemCode } from '../../shared/src/schemas/problem.ts';
 
 declare module 'vitest' {
@@ -29,13 +29,16 @@ export interface TestApp {
   as(caller: Caller): Promise<TestAgent>;
 }
 
+/** Limits are a matter of their own tests. */
+const unlimited = { LIMIT_ANONYMOUS: '1000000', LIMIT_PAGE: '1000000', LIMIT_ACCOUNT: '1000000' };
+
 /** Ends with the test that made it. */
 export function testApp(settings: Record<string, string> = {}): TestApp {
   const folder = mkdtempSync(path.join(tmpdir(), 'tiltwright-test-'));
   cpSync(databaseFile(inject('seededDataFolder')), databaseFile(folder));
-  const config = readConfig({ DATA_DIR: folder, NODE_ENV: 'test', LOG_LEVEL: 'silent', ...settings });
+  const config = readConfig({ DATA_DIR: folder, NODE_ENV: 'test', LOG_LEVEL: 'silent', ...unlimited, ...settings });
   const db = connect(databaseFile(folder));
-  const app = createApp({ db, config, search: catalogSearch(db) });
+  const app = createApp(createDeps(db, config));
   onTestFinished(() => {
     db.$client.close();
     rmSync(folder, { recursive: true, force: true });
