@@ -1,6 +1,7 @@
 // Running trim of a planing hull: Savitsky 1964, Hydrodynamic Design of Planing Hulls, Marine Technology 1(1), 71–95.
 // Heights are up from the keel and lengths forward of the transom, so an outboard's propeller has both below 0.
 // Inside this file angles are degrees where the paper's formulas take degrees; the face is SI and radians.
+import { signChange } from '../sign-change.ts';
 import { degToRad, gravityMps2, radToDeg, type Water } from '../units.ts';
 
 export interface PlaningHull {
@@ -69,90 +70,143 @@ export function wettedLengthRatio(liftOverTrim: number, cvSquared: number): numb
   return r * r;
 }
 
-/** Everything that follows from a trim; `momentNm` is bow-down positive and 0 at equilibrium. Null where the formulas give none. */
-export function planingBalance(hull: PlaningHull, thrust: Thrust, speedMps: number, water: Water, trimRad: number) {
-  const b = hull.chineBeamM;
-  const weight = hull.massKg * gravityMps2;
-  const beta = radToDeg(hull.deadriseRad);
-  const dynamic = 0.5 * water.densityKgM3 * speedMps * speedMps;
-  const cvSquared = (speedMps * speedMps) / (gravityMps2 * b);
-  const trimPower = radToDeg(trimRad) ** 1.1;
-  const lift = flatPlateLift(weight / (dynamic * b * b), beta);
-  const lambda = wettedLengthRatio(lift / trimPower, cvSquared);
+/** What does not change with the trim. */
+interface Terms {
+  beamM: number;
+  betaDeg: number;
+  tanBeta: number;
+  cosBeta: number;
+  weightN: number;
+  cvSquared: number;
+  flatPlateLift: number;
+  lcgM: number;
+  frictionArmM: number;
+  thrustArmM: number;
+  cosThrust: number;
+  sinThrust: number;
+  speedMps: number;
+  halfDensity: number;
+  viscosityM2s: number;
+}
+
+function termsOf(hull: PlaningHull, thrust: Thrust, speedMps: number, water: Water): Terms {
+  const beamM = hull.chineBeamM;
+  const weightN = hull.massKg * gravityMps2;
+  const betaDeg = radToDeg(hull.deadriseRad);
+  const tanBeta = Math.tan(hull.deadriseRad);
+  const halfDensity = 0.5 * water.densityKgM3;
+  return {
+    beamM,
+    betaDeg,
+    tanBeta,
+    cosBeta: Math.cos(hull.deadriseRad),
+    weightN,
+    cvSquared: (speedMps * speedMps) / (gravityMps2 * beamM),
+    flatPlateLift: flatPlateLift(weightN / (halfDensity * speedMps * speedMps * beamM * beamM), betaDeg),
+    lcgM: hull.lcgM,
+    frictionArmM: hull.vcgM - (beamM / 4) * tanBeta,
+    thrustArmM: thrust.armM,
+    cosThrust: Math.cos(thrust.inclinationRad),
+    sinThrust: Math.sin(thrust.inclinationRad),
+    speedMps,
+    halfDensity,
+    viscosityM2s: water.viscosityM2s,
+  };
+}
+
+/** Everything that follows from a mean wetted length; the moment is bow-down positive and 0 at equilibrium. */
+interface Balance {
+  trimRad: number;
+  momentNm: number;
+  dragN: number;
+  keelM: number;
+  chineM: number;
+}
+
+/**
+ * Fills in the balance at a mean wetted length λ. Lift fixes the trim that belongs to it (eq. 15 solved for τ), so no inner search is
+ * needed. The moment is NaN where the formulas give none.
+ */
+function balanceAt(k: Terms, lambda: number, balance: Balance): number {
+  const b = k.beamM;
+  const lengthM = lambda * b;
+  const root = Math.sqrt(lambda);
+  const dynamicPart = 0.012 * root;
+  const trimPower = k.flatPlateLift / (dynamicPart + (0.0055 * root * lambda * lambda) / k.cvSquared);
+  const trimRad = degToRad(trimPower ** (1 / 1.1));
   const sin = Math.sin(trimRad);
   const cos = Math.cos(trimRad);
   // Centre of pressure ahead of the transom.
-  const pressureM = lambda * b * (0.75 - 1 / ((5.21 * cvSquared) / (lambda * lambda) + 2.39));
-  // The spray root runs from the keel aft to the chine; a chine it never reaches stays dry.
-  const tanBeta = Math.tan(hull.deadriseRad);
-  const keelLessChine = ((b / Math.PI) * tanBeta) / (sin / cos);
-  const chineM = lambda * b - keelLessChine / 2;
+  const pressureM = lengthM * (0.75 - 1 / ((5.21 * k.cvSquared) / (lambda * lambda) + 2.39));
+  // The spray root runs from the keel aft to the chine; a chine it never reaches stays dry, and the wetted area is a triangle.
+  const keelLessChine = ((b / Math.PI) * k.tanBeta * cos) / sin;
+  const chineM = lengthM - keelLessChine / 2;
   const dryChine = chineM < 0;
-  const keelM = dryChine ? 2 * lambda * b : lambda * b + keelLessChine / 2;
-  const cosBeta = Math.cos(hull.deadriseRad);
-  const wettedM2 = dryChine ? (keelM * keelM * Math.PI * (sin / cos)) / (2 * tanBeta * cosBeta) : (lambda * b * b) / cosBeta;
+  const keelM = dryChine ? 2 * lengthM : lengthM + keelLessChine / 2;
+  const wettedM2 = dryChine ? (keelM * keelM * Math.PI * (sin / cos)) / (2 * k.tanBeta * k.cosBeta) : (lengthM * b) / k.cosBeta;
   // Mean speed over the bottom, a little below the boat's.
-  const dynamicLift = 0.012 * Math.sqrt(lambda) * trimPower;
-  const slowed = 1 - (dynamicLift - 0.0065 * beta * dynamicLift ** 0.6) / (lambda * cos);
-  if (!(slowed > 0)) return null;
-  const bottomSpeed = speedMps * Math.sqrt(slowed);
-  const reynolds = (bottomSpeed * lambda * b) / water.viscosityM2s;
+  const dynamicLift = dynamicPart * trimPower;
+  const slowed = 1 - (dynamicLift - 0.0065 * k.betaDeg * dynamicLift ** 0.6) / (lambda * cos);
+  const bottomSpeed = k.speedMps * Math.sqrt(slowed);
+  const logReynolds = Math.log10((bottomSpeed * lengthM) / k.viscosityM2s) - 2;
   // ITTC-1957 correlation line with a roughness allowance of 0.0004.
-  const friction = 0.075 / (Math.log10(reynolds) - 2) ** 2 + 0.0004;
-  const frictionN = 0.5 * water.densityKgM3 * bottomSpeed * bottomSpeed * wettedM2 * friction;
+  const frictionN = k.halfDensity * bottomSpeed * bottomSpeed * wettedM2 * (0.075 / (logReynolds * logReynolds) + 0.0004);
   // Forces along and square to the keel, then moments about the centre of gravity.
-  const thrustN = (weight * sin + frictionN) / Math.cos(thrust.inclinationRad);
-  const normalN = weight * cos - thrustN * Math.sin(thrust.inclinationRad);
-  const frictionArmM = hull.vcgM - (b / 4) * tanBeta;
-  const momentNm = normalN * (hull.lcgM - pressureM) + frictionN * frictionArmM - thrustN * thrust.armM;
+  const thrustN = (k.weightN * sin + frictionN) / k.cosThrust;
+  const normalN = k.weightN * cos - thrustN * k.sinThrust;
+  balance.trimRad = trimRad;
+  balance.momentNm = normalN * (k.lcgM - pressureM) + frictionN * k.frictionArmM - thrustN * k.thrustArmM;
   // What the water takes, whatever the thrust line: D = W tan τ + D_f / cos τ.
-  const dragN = weight * (sin / cos) + frictionN / cos;
-  return { momentNm, lambda, dragN, keelM, chineM: dryChine ? 0 : chineM, dryChine, cvSquared };
+  balance.dragN = k.weightN * (sin / cos) + frictionN / cos;
+  balance.keelM = keelM;
+  balance.chineM = dryChine ? 0 : chineM;
+  return balance.momentNm;
 }
 
-const searchFromRad = degToRad(0.5);
-const searchToRad = degToRad(20);
-const searchSteps = 78;
+const leastTrimDeg = 0.5;
+const greatestTrimDeg = 20;
+const scanSteps = 12;
 
 /**
- * The trim at which moments balance: the first change of the moment from bow-up to bow-down as trim grows between 0.5° and 20°.
+ * The trim at which moments balance: the first change of the moment from bow-up to bow-down as trim grows from 0.5° to 20°.
  * Valid for 0.60 ≤ Cv ≤ 13, 2° ≤ τ ≤ 15°, λ ≤ 4; outside it answers with a flag. Null where no balance exists.
  */
 export function planingTrim(hull: PlaningHull, thrust: Thrust, speedMps: number, water: Water): PlaningState | null {
   if (!(speedMps > 0)) return null;
-  const momentAt = (trimRad: number) => planingBalance(hull, thrust, speedMps, water, trimRad)?.momentNm ?? Number.NaN;
-  let low = Number.NaN;
-  let high = Number.NaN;
-  let before = momentAt(searchFromRad);
-  for (let i = 1; i <= searchSteps; i++) {
-    const trimRad = searchFromRad + ((searchToRad - searchFromRad) * i) / searchSteps;
-    const moment = momentAt(trimRad);
-    if (before < 0 && moment >= 0) {
-      high = trimRad;
-      low = searchFromRad + ((searchToRad - searchFromRad) * (i - 1)) / searchSteps;
-      break;
-    }
-    before = moment;
+  const terms = termsOf(hull, thrust, speedMps, water);
+  const balance: Balance = { trimRad: 0, momentNm: 0, dragN: 0, keelM: 0, chineM: 0 };
+  const longest = wettedLengthRatio(terms.flatPlateLift / leastTrimDeg ** 1.1, terms.cvSquared);
+  const shortest = wettedLengthRatio(terms.flatPlateLift / greatestTrimDeg ** 1.1, terms.cvSquared);
+  // Trim grows as the wetted length shrinks: from the longest down, in equal ratios, to the first change of sign.
+  const ratio = (shortest / longest) ** (1 / scanSteps);
+  let long = longest;
+  let atLong = balanceAt(terms, long, balance);
+  let short = long;
+  let atShort = Number.NaN;
+  for (let i = 0; i < scanSteps; i++) {
+    short = long * ratio;
+    atShort = balanceAt(terms, short, balance);
+    if (atLong < 0 && atShort >= 0) break;
+    long = short;
+    atLong = atShort;
   }
-  if (Number.isNaN(high)) return null;
-  for (let i = 0; i < 60 && high - low > 1e-12; i++) {
-    const middle = (low + high) / 2;
-    if (momentAt(middle) < 0) low = middle;
-    else high = middle;
-  }
-  const trimRad = (low + high) / 2;
-  const balance = planingBalance(hull, thrust, speedMps, water, trimRad);
-  if (!balance) return null;
-  const speedCoefficient = Math.sqrt(balance.cvSquared);
-  const trimDeg = radToDeg(trimRad);
+  if (!(atLong < 0 && atShort >= 0)) return null;
+  const lambda = signChange((x) => balanceAt(terms, x, balance), long, atLong, short, atShort);
+  balanceAt(terms, lambda, balance);
+  return stateOf(terms, lambda, balance);
+}
+
+function stateOf(terms: Terms, lambda: number, balance: Balance): PlaningState {
+  const speedCoefficient = Math.sqrt(terms.cvSquared);
+  const trimDeg = radToDeg(balance.trimRad);
   const flags: SavitskyFlag[] = [];
   if (speedCoefficient < 0.6 || speedCoefficient > 13) flags.push('speed-outside-range');
   if (trimDeg < 2 || trimDeg > 15) flags.push('trim-outside-range');
-  if (balance.lambda > 4) flags.push('wetted-length-outside-range');
-  if (balance.dryChine) flags.push('dry-chine');
+  if (lambda > 4) flags.push('wetted-length-outside-range');
+  if (balance.chineM === 0) flags.push('dry-chine');
   return {
-    trimRad,
-    wettedLengthRatio: balance.lambda,
+    trimRad: balance.trimRad,
+    wettedLengthRatio: lambda,
     dragN: balance.dragN,
     wettedKeelM: balance.keelM,
     wettedChineM: balance.chineM,
