@@ -34,7 +34,7 @@ export const mappings = sqliteTable(
     table: text('table_name').$type<Table>().notNull(),
     /** SHA-256 of the header's words, their order aside. */
     fingerprint: text('fingerprint').notNull(),
-    mapping: text('mapping', { mode: 'json' }).$type<Mapping>().notNull(),
+    mapping: text('mapping', { mode: 'json' }).$type<Mapping & { header: string[] }>().notNull(),
     savedAt: text('saved_at').notNull(),
     savedBy: text('saved_by').notNull(),
   },

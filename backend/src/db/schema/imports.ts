@@ -18,6 +18,8 @@ export const imports = sqliteTable(
     sha256: text('sha256').notNull(),
     encoding: text('encoding'),
     delimiter: text('delimiter'),
+    /** Whether the comma is the decimal mark, where the cells show it. */
+    decimalComma: integer('decimal_comma', { mode: 'boolean' }),
     rows: integer('rows'),
     checkedRows: integer('checked_rows').notNull().default(0),
     /** Edition the fates were worked out against; publishing needs it to be the newest still. */

@@ -1,0 +1,1 @@
+ALTER TABLE `imports` ADD `decimal_comma` integer;
