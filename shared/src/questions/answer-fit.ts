@@ -5,8 +5,10 @@ import { interval90 } from '../engine/uncertainty.ts';
 import { degToRad, mmToM } from '../engine/units.ts';
 import { engineVersion } from '../engine/version.ts';
 import type { FitAnswer, FitQuestion } from '../schemas/fit.ts';
+import { compatibilityOutcomes } from './compatibility.ts';
 import { type Running, sceneOf, trimPointsOf, widenedTrim } from './evaluate.ts';
 import { fillTiltScale } from './fill-sensor.ts';
+import { flowOutcomes } from './flow-rules.ts';
 import { geometryFaults } from './geometry-faults.ts';
 import { hingesOf } from './next-measurement.ts';
 import type { AnswerContext, ResolvedParts } from './parts.ts';
@@ -40,6 +42,9 @@ export function answerFit(question: FitQuestion, parts: ResolvedParts, context: 
   const { sides, window, odds } = here;
   const clearance = clearanceAnswer(sides, window, odds);
   const reach = reachOf(p, n, sides, wanted, tilt.setDeg, clearance.nearestClearTiltDeg, scale);
+  const states = otherStates(question, p, n, tilt.setDeg, wanted, here, sampled);
+  const compatibility = compatibilityOutcomes(question, p, n, tilt);
+  const flow = flowOutcomes(question, p, n, scene, tilt.setDeg, [tilt.attitudeDeg, ...states.map(({ attitudeDeg }) => attitudeDeg)]);
   const judgement = judge({
     faults: geometryFaults(p, scene, degToRad(tilt.setDeg), mmToM(n.transducer.sideApertureMm)),
     sides,
@@ -48,7 +53,10 @@ export function answerFit(question: FitQuestion, parts: ResolvedParts, context: 
     trim,
     tilt,
     reach: { ...reach, unblocked: reach.unblocked || (sampled && maybeUnblocked(p, reach, wanted)) },
-    rules: { no: false, caution: false },
+    rules: {
+      no: compatibility.some(({ outcome }) => outcome === 'no'),
+      caution: [...compatibility, ...flow].some(({ rule, outcome }) => outcome === 'caution' && rule !== 'tilt-range'),
+    },
   });
   const hinges = trims
     ? hingesOf(p, n, now, points, target.attitudeDeg, trims, here.samples, wanted)
@@ -60,12 +68,12 @@ export function answerFit(question: FitQuestion, parts: ResolvedParts, context: 
   if (trim.basis === 'class') cautions.push('trim-is-class-value');
   const said = rounded({
     ...judgement,
-    compatibility: [],
+    compatibility,
     trim,
     tilt,
     clearance,
-    flow: [],
-    states: otherStates(question, p, n, tilt.setDeg, wanted, here, sampled),
+    flow,
+    states,
     ...hinges,
     assumptions: p.assumptions,
     cautions: cautions.map((code) => coded(cautionCodes, code)),
