@@ -1,6 +1,6 @@
 // A real mail server on loopback that keeps what it takes; what it says can be changed by a test.
 import type { AddressInfo } from 'node:net';
-import { type SMTPServerDataStream, SMTPServer } from 'smtp-server';
+import { SMTPServer, type SMTPServerDataStream } from 'smtp-server';
 import { onTestFinished } from 'vitest';
 
 export interface ReceivedMail {

@@ -27,6 +27,8 @@ export interface TestApp {
   config: Config;
   /** Someone with a cookie jar of their own. */
   as(caller: Caller): Promise<TestAgent>;
+  /** The server started again on the same database. */
+  again(): TestApp;
 }
 
 /** Limits are a matter of their own tests. */
@@ -38,14 +40,23 @@ export function testApp(settings: Record<string, string> = {}): TestApp {
   cpSync(databaseFile(inject('seededDataFolder')), databaseFile(folder));
   const config = readConfig({ DATA_DIR: folder, NODE_ENV: 'test', LOG_LEVEL: 'silent', ...unlimited, ...settings });
   const db = connect(databaseFile(folder));
-  const app = createApp(createDeps(db, config));
   onTestFinished(() => {
     db.$client.close();
     rmSync(folder, { recursive: true, force: true });
   });
+  return serving(db, config);
+}
+
+function serving(db: Db, config: Config): TestApp {
+  const deps = createDeps(db, config);
+  const app = createApp(deps);
   return {
     db,
     config,
+    again() {
+      deps.usage.flush();
+      return serving(db, config);
+    },
     async as(caller) {
       const agent = supertest.agent(app);
       if (caller === 'visitor') return agent;
