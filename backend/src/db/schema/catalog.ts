@@ -147,7 +147,10 @@ export const revisions = sqliteTable(
       after: Record<string, Provenance[string]>;
     }>(),
   },
-  (table) => [primaryKey({ columns: [table.recordId, table.revision] }), index('revisions_edition').on(table.edition)],
+  (table) => [
+    primaryKey({ columns: [table.recordId, table.revision] }),
+    index('revisions_edition').on(table.edition, table.recordId, table.revision),
+  ],
 );
 
 /** Text of the full-text index `search_index`, one row a record that can be found. */

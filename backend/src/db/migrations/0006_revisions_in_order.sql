@@ -1,0 +1,2 @@
+DROP INDEX `revisions_edition`;--> statement-breakpoint
+CREATE INDEX `revisions_edition` ON `revisions` (`edition`,`record_id`,`revision`);
