@@ -1,0 +1,34 @@
+import type { Logger } from 'pino';
+import type { Db } from '../db/connect.ts';
+import { deliverDueMail } from './deliver-mail.ts';
+import type { MailTransport } from './transport.ts';
+
+/** How soon after an event its mail begins to leave. */
+const everyMs = 1000;
+
+/** Sends what is due, again and again, until stopped; it keeps no process alive. */
+export function startMailWorker(db: Db, transport: MailTransport, logger: Pick<Logger, 'error' | 'warn'>): () => Promise<void> {
+  let running: Promise<void> = Promise.resolve();
+  let busy = false;
+  const round = async () => {
+    try {
+      const { failed } = await deliverDueMail(db, transport);
+      if (failed > 0) logger.warn({ failed }, 'mails could not be sent');
+    } catch (error) {
+      logger.error({ err: error }, 'sending mail failed');
+    } finally {
+      busy = false;
+    }
+  };
+  const timer = setInterval(() => {
+    if (busy) return;
+    busy = true;
+    running = round();
+  }, everyMs);
+  timer.unref();
+  return async () => {
+    clearInterval(timer);
+    await running;
+    transport.close();
+  };
+}
