@@ -10,7 +10,7 @@ export default function SignUp() {
   return (
     <div className="flex max-w-[30rem] flex-col gap-6 px-4 py-8 desk:px-6">
       <PageTitle title="Make an account" />
-      <p className="text-ink-2">An e-mail address, a name and a password; nothing else is asked.</p>
+      <p className="text-ink-2">With an account you keep boats and checks. The address is used to sign in and for nothing else.</p>
       <SignUpForm onSignedUp={() => void navigate(safeNext(next), { replace: true })} />
       <p>
         Have one already? <Link to={`${paths.signIn}${next ? `?next=${encodeURIComponent(next)}` : ''}`}>Sign in</Link>

@@ -129,14 +129,14 @@ const narrowLooks: Record<NarrowPlace, string> = {
   body: 'max-tablet:col-span-2 max-tablet:py-1',
   head: 'max-tablet:-order-2 max-tablet:col-start-1',
   side: 'max-tablet:-order-1 max-tablet:col-start-2 max-tablet:max-w-48 max-tablet:text-right',
-  note: 'max-tablet:col-span-2 max-tablet:text-note max-tablet:text-ink-2 max-tablet:has-[.not-noted]:hidden',
+  note: 'max-tablet:col-span-2 max-tablet:text-note max-tablet:text-ink-2 max-tablet:has-[.narrow-skip]:hidden',
   labelled:
-    'labelled max-tablet:col-span-2 max-tablet:grid max-tablet:grid-cols-[7rem_minmax(0,1fr)] max-tablet:gap-2 max-tablet:text-note max-tablet:has-[.not-noted]:hidden',
+    'labelled max-tablet:col-span-2 max-tablet:grid max-tablet:grid-cols-[7rem_minmax(0,1fr)] max-tablet:gap-2 max-tablet:text-note max-tablet:has-[.narrow-skip]:hidden',
 };
 
 /** Stands in a cell for what nobody noted; on a narrow screen the whole line is left out. */
 export function NotNoted({ words = 'not noted' }: { words?: string }) {
-  return <span className="not-noted text-ink-2">{words}</span>;
+  return <span className="narrow-skip text-ink-2">{words}</span>;
 }
 
 function ariaSort<T extends RowData>(column: Column<typeof features, T>) {

@@ -89,7 +89,7 @@ function About({ row, table }: { row: ListedRow; table: Table }) {
 
 function Findings({ row, table, units }: { row: ListedRow; table: Table; units: UnitChoice }) {
   const { errors, cautions, changes } = row;
-  if (errors.length + cautions.length + changes.length === 0) return <span className="not-noted text-ink-2">{fateMeaning[row.fate]}</span>;
+  if (errors.length + cautions.length + changes.length === 0) return <span className="text-ink-2">{fateMeaning[row.fate]}</span>;
   return (
     <ul className="flex flex-col gap-1">
       {errors.map((error) => (

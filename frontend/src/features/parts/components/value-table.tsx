@@ -14,6 +14,8 @@ interface Row {
   value: string;
   basis: string;
   source: string | null;
+  /** True where it is known in the same way and from the same place as most of the record. */
+  asMost: boolean;
 }
 
 const columns: readonly TableColumn<Row>[] = [
@@ -36,8 +38,23 @@ const columns: readonly TableColumn<Row>[] = [
     narrow: 'side',
     cell: ({ row }) => <span className="font-firm">{row.original.value}</span>,
   },
-  { id: 'basis', accessorKey: 'basis', header: 'Known how', narrow: 'note' },
-  { id: 'source', header: 'From where', narrow: 'note', cell: ({ row }) => row.original.source ?? <NotNoted words="not stated" /> },
+  {
+    id: 'basis',
+    header: 'Known how',
+    narrow: 'note',
+    cell: ({ row: { original } }) => <span className={original.asMost ? 'narrow-skip' : ''}>{original.basis}</span>,
+  },
+  {
+    id: 'source',
+    header: 'From where',
+    narrow: 'note',
+    cell: ({ row: { original } }) =>
+      original.source === null ? (
+        <NotNoted words="not stated" />
+      ) : (
+        <span className={original.asMost ? 'narrow-skip' : ''}>{original.source}</span>
+      ),
+  },
 ];
 
 /** Every value of a record with its uncertainty, basis and source; then, in one sentence, what is not known. */
@@ -45,8 +62,10 @@ export function ValueTable({ table, sheet }: { table: CatalogTable; sheet: AnySh
   const units = useUnits();
   const rows = useMemo(() => rowsOf(table, sheet, units), [table, sheet, units]);
   const missing = sheetFields(table).filter((field) => !(field in sheet.values));
+  const most = rows.find((row) => row.asMost);
   return (
     <>
+      {most && <p className="pb-2 text-note text-ink-2 tablet:hidden">Where nothing else is said: {originOf(most)}.</p>}
       <DataTable
         caption="Values, how they are known, and where they come from"
         captionHidden
@@ -65,7 +84,7 @@ export function ValueTable({ table, sheet }: { table: CatalogTable; sheet: AnySh
 }
 
 function rowsOf(table: CatalogTable, sheet: AnySheet, units: UnitChoice): Row[] {
-  return sheetFields(table).flatMap((field) => {
+  const rows = sheetFields(table).flatMap((field) => {
     const sourced = sheet.values[field];
     if (!sourced) return [];
     const { label, help } = metaOfField(table, field);
@@ -75,17 +94,20 @@ function rowsOf(table: CatalogTable, sheet: AnySheet, units: UnitChoice): Row[] 
       typeof value === 'number' && quantity !== 'plain'
         ? formatEstimate(value, sigma, quantity, units)
         : formatFieldValue(table, field, value, units);
-    return [
-      {
-        field,
-        label,
-        help,
-        value: text,
-        basis: basisWords(basis),
-        source: [source, sourceDate].filter(Boolean).join(', ') || null,
-      },
-    ];
+    const from = [source, sourceDate].filter(Boolean).join(', ') || null;
+    return [{ field, label, help, value: text, basis: basisWords(basis), source: from, asMost: false }];
   });
+  const most = mostOf(rows);
+  return rows.map((row) => ({ ...row, asMost: most !== null && originOf(row) === originOf(most) }));
+}
+
+function originOf({ basis, source }: Pick<Row, 'basis' | 'source'>): string {
+  return source === null ? basis : `${basis}, ${source}`;
+}
+
+/** A row of the origin that more than half of the values share, if there is one: on a narrow screen it is said once. */
+function mostOf(rows: readonly Row[]): Row | null {
+  return rows.find((row) => rows.filter((other) => originOf(other) === originOf(row)).length * 2 > rows.length) ?? null;
 }
 
 function lowerFirst(text: string): string {

@@ -65,8 +65,8 @@ export function SignUpForm({ onSignedUp }: { onSignedUp: () => void }) {
         error={errors.password && said(errors.password, 'The password needs 12 characters or more.')}
         {...register('password')}
       />
-      <label className="flex min-h-11 items-center gap-3">
-        <input type="checkbox" className="size-6 accent-ink" {...register('integrator')} />
+      <label className="flex min-h-11 items-start gap-3">
+        <input type="checkbox" className="mt-0.5 size-5 flex-none accent-ink" {...register('integrator')} />
         <span>
           I rig boats for others or build on the API
           <span className="block text-note text-ink-2">Adds API keys to the account; everything else stays the same.</span>
