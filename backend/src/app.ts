@@ -9,6 +9,7 @@ import { identify } from './auth/identify.ts';
 import { sameOrigin } from './auth/same-origin.ts';
 import type { Deps } from './deps.ts';
 import { ApiProblem } from './errors.ts';
+import { preflight } from './http/cors.ts';
 import { mountRoutes } from './http/mount-routes.ts';
 import { openApiDocument } from './http/openapi.ts';
 import { problemHandler } from './http/problem.ts';
@@ -51,13 +52,14 @@ export function createApp(deps: Deps, logger: Logger = pino({ level: deps.config
   const routes = allRoutes(deps);
   const document = openApiDocument(routes);
   const api = express.Router();
+  api.use(preflight);
   api.use(express.json({ limit: '1mb', strict: false }));
   api.use(sameOrigin);
   api.use(identify(db, config));
   api.get('/openapi.json', (_req, res) => {
     res.setHeader('Cache-Control', 'no-cache').json(document);
   });
-  api.use(mountRoutes(routes));
+  api.use(mountRoutes(routes, deps));
   app.use('/api/v1', api);
   app.use('/api/docs', docsHeaders, swaggerUi.serve, swaggerUi.setup(document, { customSiteTitle: 'Tiltwright API' }));
   app.use('/api', (req) => {

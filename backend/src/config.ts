@@ -6,6 +6,8 @@ import * as z from 'zod';
 import { topFolder } from './paths.ts';
 import { StartProblem } from './start-problem.ts';
 
+const limit = (usual: number) => z.coerce.number().int().min(1).max(1e9).default(usual);
+
 const Settings = z.object({
   PORT: z.coerce.number().int().min(0).max(65535).default(4310).describe('Port of site and API; 0 takes any free one.'),
   HOST: z.string().min(1).default('127.0.0.1').describe('Address to listen on.'),
@@ -55,6 +57,11 @@ const Settings = z.object({
     .max(23)
     .default(3)
     .describe('Hour of the night, by this machine’s clock, at which old things are removed.'),
+  LIMIT_ANONYMOUS: limit(60).describe('Units a minute for an address nobody is signed in from; the admin can change all limits later.'),
+  LIMIT_PAGE: limit(1200).describe('Units a minute for the pages of this site in one browser.'),
+  LIMIT_ACCOUNT: limit(600).describe('Units a minute for an account.'),
+  LIMIT_KEY: limit(6000).describe('Units a minute for an API key.'),
+  LIMIT_KEY_DAY: limit(500_000).describe('Units a day for an API key.'),
   TRUST_PROXY: z.coerce.number().int().min(0).max(5).default(0).describe('How many proxies stand in front; 0 for none.'),
 });
 
@@ -80,6 +87,8 @@ export interface Config {
   keepMailDays: number;
   keepAuditYears: number;
   tidyHour: number;
+  /** Units a minute, and for keys also a day; what a kind of caller has until an admin says otherwise. */
+  limits: { anonymous: number; page: number; account: number; key: number; keyDay: number };
 }
 
 /**
@@ -124,6 +133,13 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     keepMailDays: settings.KEEP_MAIL_DAYS,
     keepAuditYears: settings.KEEP_AUDIT_YEARS,
     tidyHour: settings.TIDY_HOUR,
+    limits: {
+      anonymous: settings.LIMIT_ANONYMOUS,
+      page: settings.LIMIT_PAGE,
+      account: settings.LIMIT_ACCOUNT,
+      key: settings.LIMIT_KEY,
+      keyDay: settings.LIMIT_KEY_DAY,
+    },
   };
 }
 

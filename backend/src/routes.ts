@@ -2,12 +2,17 @@ import type { Deps } from './deps.ts';
 import type { Route } from './http/operation.ts';
 import { boatRoutes } from './resources/boats/routes.ts';
 import { catalogRoutes } from './resources/catalog/routes.ts';
+import { changeRoutes } from './resources/changes/routes.ts';
 import { editionRoutes } from './resources/editions/routes.ts';
+import { exportRoutes } from './resources/exports/routes.ts';
+import { reviewRoutes } from './resources/imports/review-routes.ts';
 import { importRoutes } from './resources/imports/routes.ts';
 import { keyRoutes } from './resources/keys/routes.ts';
+import { limitRoutes } from './resources/limits/routes.ts';
 import { questionRoutes } from './resources/questions/routes.ts';
 import { searchRoutes } from './resources/search/routes.ts';
 import { sessionRoutes } from './resources/session/routes.ts';
+import { usageRoutes } from './resources/usage/routes.ts';
 
 /** Everything the API can do. */
 export function allRoutes(deps: Deps): Route[] {
@@ -15,10 +20,15 @@ export function allRoutes(deps: Deps): Route[] {
     ...catalogRoutes(deps),
     ...searchRoutes(deps),
     ...editionRoutes(deps),
+    ...changeRoutes(deps),
+    ...exportRoutes(deps),
     ...questionRoutes(deps),
     ...sessionRoutes(deps),
     ...keyRoutes(deps),
+    ...usageRoutes(deps),
+    ...limitRoutes(deps),
     ...boatRoutes(deps),
     ...importRoutes(deps),
+    ...reviewRoutes(deps),
   ];
 }

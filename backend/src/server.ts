@@ -7,9 +7,10 @@ import { type Config, readConfig } from './config.ts';
 import { connect, type Db, databaseFile } from './db/connect.ts';
 import { migrateDatabase } from './db/migrate.ts';
 import { demoAccounts, demoPassword, seedDemoWorld } from './db/seed.ts';
+import { createDeps } from './deps.ts';
 import { migrationsFolder, seedsFolder } from './paths.ts';
 import { recoverImports } from './resources/imports/recover-imports.ts';
-import { catalogSearch } from './resources/search/search-catalog.ts';
+import { flushEveryMs } from './resources/usage/usage-counter.ts';
 import { StartProblem } from './start-problem.ts';
 
 /** Open requests get this long to end when the server is told to stop. */
@@ -20,9 +21,15 @@ async function start(): Promise<void> {
   const db = openDatabase(config);
   if (config.mode !== 'production') await seedDemoWorld(db, config, seedsFolder);
   recoverImports(db);
-  const app = createApp({ db, config, search: catalogSearch(db) }, pino({ level: config.logLevel }));
+  const deps = createDeps(db, config);
+  const flushing = setInterval(() => deps.usage.flush(), flushEveryMs).unref();
+  const app = createApp(deps, pino({ level: config.logLevel }));
   const server = await listen(app.listen.bind(app), config);
-  stopOnSignal(server, db);
+  stopOnSignal(server, () => {
+    clearInterval(flushing);
+    deps.usage.flush();
+    db.$client.close();
+  });
   greet(config, (server.address() as AddressInfo).port);
 }
 
@@ -52,10 +59,10 @@ function listen(open: (port: number, host: string, done: (error?: Error) => void
   });
 }
 
-function stopOnSignal(server: Server, db: Db): void {
+function stopOnSignal(server: Server, end: () => void): void {
   const stop = () => {
     server.close(() => {
-      db.$client.close();
+      end();
       process.exit(0);
     });
     server.closeIdleConnections();

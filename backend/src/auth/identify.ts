@@ -8,6 +8,7 @@ import type { Config } from '../config.ts';
 import type { Db } from '../db/connect.ts';
 import { apiKeys, users } from '../db/schema/people.ts';
 import { ApiProblem } from '../errors.ts';
+import { allowOrigin } from '../http/cors.ts';
 import type { Actor } from './actor.ts';
 import { readKey, secretMatches } from './keys.ts';
 import { DrizzleSessionStore } from './session-store.ts';
@@ -35,8 +36,7 @@ export function identify(db: Db, config: Config): RequestHandler[] {
     new BearerStrategy((token, done) => {
       const parts = readKey(token);
       const found = parts && findKey.get({ id: parts.id });
-      if (!found || found.key.revokedAt || found.user.disabledAt || !secretMatches(parts.secret, found.key.secretHash))
-        return done(null, false);
+      if (!found || found.user.disabledAt || !isGood(found.key, parts.secret)) return done(null, false);
       noteUse(db, found.key);
       const actor: KeyActor = {
         kind: 'key',
@@ -44,6 +44,7 @@ export function identify(db: Db, config: Config): RequestHandler[] {
         userId: found.user.id,
         roles: found.user.roles,
         scopes: found.key.scopes,
+        origins: found.key.kind === 'browser' ? found.key.origins : null,
       };
       return done(null, actor as never);
     }),
@@ -73,12 +74,13 @@ export function identify(db: Db, config: Config): RequestHandler[] {
       if (error) return next(error);
       if (!actor)
         return next(
-          new ApiProblem('invalid-key', 'The key is unknown, revoked or mistyped.', [], {
+          new ApiProblem('invalid-key', 'The key is unknown, revoked, expired or mistyped.', [], {
             'WWW-Authenticate': 'Bearer realm="tiltwright"',
           }),
         );
-      if (req.headers.origin !== undefined)
-        return next(new ApiProblem('foreign-origin', 'A server key must not be used from a browser; anyone could read it there.'));
+      const refusal = refusedOrigin(actor, req.headers.origin);
+      if (refusal) return next(new ApiProblem('foreign-origin', refusal));
+      if (req.headers.origin !== undefined) allowOrigin(res, req.headers.origin);
       req.actor = actor;
       next();
     })(req, res, next);
@@ -98,6 +100,22 @@ export function identify(db: Db, config: Config): RequestHandler[] {
   };
 
   return [refuseMisplacedTokens, bearer, skipForKeys(sessions), skipForKeys(guards.session() as RequestHandler), person];
+}
+
+/** The present secret, or the one before it while the overlap of a rotation lasts. */
+function isGood(key: typeof apiKeys.$inferSelect, secret: string): boolean {
+  const now = new Date().toISOString();
+  if (key.revokedAt || (key.expiresAt !== null && key.expiresAt <= now)) return false;
+  if (secretMatches(secret, key.secretHash)) return true;
+  return key.previousHash !== null && key.previousUntil !== null && key.previousUntil > now && secretMatches(secret, key.previousHash);
+}
+
+/** Why a key may not be used from where the request comes; undefined where it may. */
+function refusedOrigin({ origins }: KeyActor, origin: string | undefined): string | undefined {
+  if (origins === null)
+    return origin === undefined ? undefined : 'A server key must not be used from a browser; anyone could read it there.';
+  if (origin === undefined) return 'A browser key is for pages of its origins; a program takes a server key.';
+  return origins.includes(origin) ? undefined : `The key does not list ${origin}.`;
 }
 
 /** Day by day is enough to see which keys are in use, and spares a write a request. */

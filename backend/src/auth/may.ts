@@ -17,6 +17,9 @@ const rules = {
   'account.own': { who: 'members', scope: null },
   'boats.own': { who: ['customer'], scope: 'boats:write' },
   'keys.own': { who: ['integrator'], scope: null },
+  'batch.compute': { who: 'members', scope: 'fit:compute' },
+  'webhooks.own': { who: ['integrator'], scope: 'webhooks:manage' },
+  'limits.manage': { who: ['admin'], scope: null },
   'imports.manage': { who: ['steward'], scope: null },
 } as const satisfies Record<string, Rule>;
 export type Permission = keyof typeof rules;

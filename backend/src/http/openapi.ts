@@ -1,9 +1,10 @@
 // The OpenAPI 3.1 document, from the same descriptions the routes are made of.
 import { OpenAPIRegistry, OpenApiGeneratorV31, type ResponseConfig } from '@asteasolutions/zod-to-openapi';
 import { Problem, type ProblemCode, problems } from '@tiltwright/shared/schemas/problem.ts';
+import * as z from 'zod';
 import { cookieName } from '../auth/identify.ts';
 import { describePermission, keyScopeOf, openToAnyone } from '../auth/may.ts';
-import type { Operation, Route } from './operation.ts';
+import { costOf, type Operation, type Route, takesIdempotencyKey } from './operation.ts';
 
 export const apiVersion = '1.0.0';
 
@@ -41,6 +42,7 @@ const tagWords: Record<string, string> = {
   Questions: 'Tilt, clearance and the whole check.',
   Accounts: 'Signing up, in and out.',
   'API keys': 'Keys for programs.',
+  Limits: 'How much each kind of caller may ask.',
   Boats: 'A person’s own boats.',
   Imports: 'The steward’s way from a CSV table to an edition.',
 };
@@ -60,21 +62,68 @@ function describe(registry: OpenAPIRegistry, operation: Operation): void {
     path,
     tags: [tag],
     summary,
-    description: [description, describePermission(may)].filter(Boolean).join('\n\n'),
+    description: [description, describePermission(may), describeCost(operation)].filter(Boolean).join('\n\n'),
     security,
     request: {
       ...(params && { params }),
       ...(query && { query }),
+      ...headerFields(operation),
       ...(content && { body: { content, required: operation.multipart !== undefined || !acceptsNothing(operation) } }),
     },
     responses: {
       [reply.status]: {
         description: reply.description,
+        headers: replyHeaders(operation),
         ...(reply.schema ? { content: { [reply.contentType ?? 'application/json']: { schema: reply.schema } } } : {}),
       },
+      ...(operation.byEdition || operation.etag ? { 304: { description: 'The caller has the present version.' } } : {}),
       ...problemResponses(operation),
     },
   });
+}
+
+function describeCost(operation: Operation): string {
+  const units = costOf(operation);
+  if (units === 0) return 'Costs nothing.';
+  const more = operation.moreCost ? `, and ${operation.moreCost.words}` : '';
+  return `Costs ${units} ${units === 1 ? 'unit' : 'units'}${more}.`;
+}
+
+const idempotencyHeader = {
+  'Idempotency-Key': z
+    .string()
+    .min(1)
+    .max(200)
+    .optional()
+    .describe('A mark of the caller’s own: the same creation sent again under it within a day happens once.'),
+};
+const ifNoneMatch = { 'If-None-Match': z.string().optional().describe('ETag the caller has; 304 where it is still the present one.') };
+
+function headerFields(operation: Operation) {
+  const fields = {
+    ...(takesIdempotencyKey(operation) && idempotencyHeader),
+    ...((operation.byEdition || operation.etag) && operation.method === 'get' && ifNoneMatch),
+    ...(operation.etag &&
+      operation.method !== 'get' && {
+        'If-Match': z.string().optional().describe('ETag it was changed from; 412 where it has changed since.'),
+      }),
+  };
+  return Object.keys(fields).length > 0 ? { headers: z.object(fields) } : {};
+}
+
+function replyHeaders(operation: Operation) {
+  return {
+    'X-Request-Id': { description: 'The caller’s own, or one of ours.', schema: { type: 'string' as const } },
+    ...(costOf(operation) > 0 && {
+      RateLimit: {
+        description: 'What is left, by the IETF’s RateLimit header fields: r units for t seconds.',
+        schema: { type: 'string' as const },
+      },
+      'RateLimit-Policy': { description: 'The limit: q units in w seconds.', schema: { type: 'string' as const } },
+    }),
+    ...((operation.byEdition || operation.etag) &&
+      operation.reply.schema && { ETag: { description: 'Version of the answer.', schema: { type: 'string' as const } } }),
+  };
 }
 
 const acceptsNothing = (operation: Operation) => operation.body?.safeParse({}).success ?? true;
@@ -86,6 +135,10 @@ function problemCodesOf(operation: Operation): ProblemCode[] {
   if (operation.body) codes.push('malformed-json', 'unsupported-media-type', 'body-too-large');
   if (operation.multipart) codes.push('unsupported-media-type', 'body-too-large');
   if (operation.method !== 'get') codes.push('foreign-origin');
+  if (costOf(operation) > 0) codes.push('too-many-requests');
+  if (takesIdempotencyKey(operation)) codes.push('idempotency-at-work', 'idempotency-mismatch');
+  if (operation.repeat === 'refuse') codes.push('already-created');
+  if (operation.etag && operation.method !== 'get') codes.push('stale-revision');
   if (!openToAnyone(operation.may)) codes.push('sign-in-needed', 'session-expired', 'not-allowed');
   codes.push('invalid-key', 'not-allowed');
   return [...codes, ...(operation.problems ?? [])];

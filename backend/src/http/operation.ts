@@ -28,6 +28,16 @@ export interface Operation<P extends Fields = Fields, Q extends Fields = Fields,
   reply: { status: 200 | 201 | 202 | 204; description: string; schema?: z.ZodType; contentType?: string };
   /** Beyond those every operation can answer with. */
   problems?: readonly ProblemCode[];
+  /** Units it costs; 1 where nothing is said. */
+  cost?: number;
+  /** Units beyond `cost` that depend on what was asked, and in words for the document. */
+  moreCost?: { of: (question: { body: z.output<B>; query: Record<string, unknown> }) => number; words: string };
+  /** Set on reads that only an edition or the engine can change: ETag and 304 before any work, answers kept. */
+  byEdition?: true;
+  /** For creations: what a repeat under the same Idempotency-Key gets; `refuse` where the answer holds a secret. */
+  repeat?: 'answer' | 'refuse';
+  /** Set where the answer's ETag is the thing's own revision: If-None-Match on reads, If-Match on writes. */
+  etag?: true;
   /** Cache-Control of a good answer; private answers say no-store. */
   cache: string;
 }
@@ -60,3 +70,10 @@ export function route<P extends Fields, Q extends Fields, B extends z.ZodType>(
 export const noStore = 'no-store';
 /** The catalog changes only by editions: keep, but ask again each time. */
 export const revalidate = 'no-cache';
+
+/** What a signed-in caller makes by POST is made once under one Idempotency-Key; a form with a file is not. */
+export const takesIdempotencyKey = ({ method, reply, may, body }: Operation): boolean =>
+  method === 'post' && (reply.status === 201 || reply.status === 202) && may !== 'session.use' && body !== undefined;
+
+/** Signing in and out, and asking who is, costs nothing; it has a brake of its own against guessing. */
+export const costOf = (operation: Operation): number => operation.cost ?? (operation.may === 'session.use' ? 0 : 1);

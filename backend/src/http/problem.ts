@@ -58,6 +58,8 @@ export const problemHandler: ErrorRequestHandler = (error, req, res, next) => {
   const problem = translate(error);
   if (problem.code === 'internal-error') req.log?.error({ err: error }, 'unexpected error');
   for (const [name, value] of Object.entries(problem.headers)) res.setHeader(name, value);
+  // Set ahead of the work, for an answer that did not come.
+  res.removeHeader('ETag');
   res
     .status(problem.status)
     .setHeader('Cache-Control', 'no-store')

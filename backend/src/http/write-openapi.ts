@@ -5,8 +5,8 @@ import path from 'node:path';
 import { readConfig } from '../config.ts';
 import { connect, databaseFile } from '../db/connect.ts';
 import { migrateDatabase } from '../db/migrate.ts';
+import { createDeps } from '../deps.ts';
 import { migrationsFolder, topFolder } from '../paths.ts';
-import { catalogSearch } from '../resources/search/search-catalog.ts';
 import { allRoutes } from '../routes.ts';
 import { openApiDocument } from './openapi.ts';
 
@@ -15,7 +15,7 @@ const folder = mkdtempSync(path.join(tmpdir(), 'tiltwright-openapi-'));
 const config = readConfig({ DATA_DIR: folder, NODE_ENV: 'test' });
 const db = connect(databaseFile(folder));
 migrateDatabase(db, migrationsFolder);
-const text = `${JSON.stringify(openApiDocument(allRoutes({ db, config, search: catalogSearch(db) })), null, 2)}\n`;
+const text = `${JSON.stringify(openApiDocument(allRoutes(createDeps(db, config))), null, 2)}\n`;
 db.$client.close();
 rmSync(folder, { recursive: true });
 

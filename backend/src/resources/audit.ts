@@ -7,10 +7,19 @@ export type AuditAction =
   | 'session.end'
   | 'account.create'
   | 'key.create'
+  | 'key.rotate'
   | 'key.revoke'
+  | 'limit.change'
+  | 'webhook.create'
+  | 'webhook.rotate'
+  | 'webhook.delete'
   | 'import.upload'
+  | 'import.map'
+  | 'import.fix'
+  | 'import.cancel'
   | 'import.discard'
-  | 'edition.publish';
+  | 'edition.publish'
+  | 'edition.rollback';
 
 type Writer = Pick<Db, 'insert'>;
 

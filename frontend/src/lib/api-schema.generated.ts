@@ -4,5670 +4,7170 @@
  */
 
 export interface paths {
-  '/hulls': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/hulls": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * List or find hulls
+         * @description In order of maker and model; with `q` the best match first. Withdrawn and superseded records are not listed.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listHulls"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * List or find hulls
-     * @description In order of maker and model; with `q` the best match first. Withdrawn and superseded records are not listed.
-     *
-     *     Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listHulls'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/hulls/{id}': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/hulls/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One hull, each value with where it comes from
+         * @description A superseded id still answers, with `supersededBy`. The ETag is the record’s own revision.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getHull"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * One hull, each value with where it comes from
-     * @description A superseded id still answers, with `supersededBy`. The ETag is the record’s own revision.
-     *
-     *     Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['getHull'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/hulls/{id}/revisions': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/hulls/{id}/revisions": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * What changed in one hull, newest first
+         * @description Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listHullRevisions"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * What changed in one hull, newest first
-     * @description Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listHullRevisions'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/lower-units': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/lower-units": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * List or find lower units
+         * @description In order of maker and model; with `q` the best match first. Withdrawn and superseded records are not listed.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listLowerUnits"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * List or find lower units
-     * @description In order of maker and model; with `q` the best match first. Withdrawn and superseded records are not listed.
-     *
-     *     Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listLowerUnits'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/lower-units/{id}': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/lower-units/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One lower unit, each value with where it comes from
+         * @description A superseded id still answers, with `supersededBy`. The ETag is the record’s own revision.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getLowerUnit"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * One lower unit, each value with where it comes from
-     * @description A superseded id still answers, with `supersededBy`. The ETag is the record’s own revision.
-     *
-     *     Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['getLowerUnit'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/lower-units/{id}/revisions': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/lower-units/{id}/revisions": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * What changed in one lower unit, newest first
+         * @description Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listLowerUnitRevisions"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * What changed in one lower unit, newest first
-     * @description Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listLowerUnitRevisions'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/transducers': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/transducers": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * List or find transducers
+         * @description In order of maker and model; with `q` the best match first. Withdrawn and superseded records are not listed.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listTransducers"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * List or find transducers
-     * @description In order of maker and model; with `q` the best match first. Withdrawn and superseded records are not listed.
-     *
-     *     Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listTransducers'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/transducers/{id}': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/transducers/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One transducer, each value with where it comes from
+         * @description A superseded id still answers, with `supersededBy`. The ETag is the record’s own revision.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getTransducer"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * One transducer, each value with where it comes from
-     * @description A superseded id still answers, with `supersededBy`. The ETag is the record’s own revision.
-     *
-     *     Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['getTransducer'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/transducers/{id}/revisions': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/transducers/{id}/revisions": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * What changed in one transducer, newest first
+         * @description Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listTransducerRevisions"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * What changed in one transducer, newest first
-     * @description Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listTransducerRevisions'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/mounts': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/mounts": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * List or find mounts
+         * @description In order of maker and model; with `q` the best match first. Withdrawn and superseded records are not listed.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listMounts"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * List or find mounts
-     * @description In order of maker and model; with `q` the best match first. Withdrawn and superseded records are not listed.
-     *
-     *     Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listMounts'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/mounts/{id}': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/mounts/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One mount, each value with where it comes from
+         * @description A superseded id still answers, with `supersededBy`. The ETag is the record’s own revision.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getMount"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * One mount, each value with where it comes from
-     * @description A superseded id still answers, with `supersededBy`. The ETag is the record’s own revision.
-     *
-     *     Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['getMount'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/mounts/{id}/revisions': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/mounts/{id}/revisions": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * What changed in one mount, newest first
+         * @description Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listMountRevisions"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * What changed in one mount, newest first
-     * @description Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listMountRevisions'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/hulls/{id}/trim-points': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/hulls/{id}/trim-points": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Measured running angles of one hull, slowest first
+         * @description Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listTrimPoints"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * Measured running angles of one hull, slowest first
-     * @description Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listTrimPoints'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/hulls/{id}/trim': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/hulls/{id}/trim": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Running trim of one hull at a speed
+         * @description Anyone; a key needs the scope `fit:compute`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getHullTrim"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * Running trim of one hull at a speed
-     * @description Anyone; a key needs the scope `fit:compute`.
-     */
-    get: operations['getHullTrim'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/search': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/search": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Find hulls, lower units, transducers and mounts by name
+         * @description Best first; slips, joined and split words allowed.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["search"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * Find hulls, lower units, transducers and mounts by name
-     * @description Best first; slips, joined and split words allowed.
-     *
-     *     Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['search'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/editions': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/editions": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Editions of the catalog, newest first
+         * @description Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listEditions"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * Editions of the catalog, newest first
-     * @description Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listEditions'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/editions/{n}': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/editions/{n}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One edition
+         * @description Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getEdition"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * One edition
-     * @description Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['getEdition'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/makers': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/makers": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Makers of the catalog, by name
+         * @description Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listMakers"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * Makers of the catalog, by name
-     * @description Anyone; a key needs the scope `catalog:read`.
-     */
-    get: operations['listMakers'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/tilt': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/tilt": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * The tilt a hull of the catalog needs at a speed
+         * @description Needed tilt = wanted attitude − running trim. Nose-up (heel-down) is positive. With `mount`, also the setting on its scale.
+         *
+         *     Anyone; a key needs the scope `fit:compute`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getTilt"];
+        put?: never;
+        /**
+         * The tilt a hull needs at a speed, parts inline or by id
+         * @description Anyone; a key needs the scope `fit:compute`.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["askTilt"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * The tilt a hull of the catalog needs at a speed
-     * @description Needed tilt = wanted attitude − running trim. Nose-up (heel-down) is positive. With `mount`, also the setting on its scale.
-     *
-     *     Anyone; a key needs the scope `fit:compute`.
-     */
-    get: operations['getTilt'];
-    put?: never;
-    /**
-     * The tilt a hull needs at a speed, parts inline or by id
-     * @description Anyone; a key needs the scope `fit:compute`.
-     */
-    post: operations['askTilt'];
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/clearance': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/clearance": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * What the lower unit hides from each side, by catalog ids
+         * @description Anyone; a key needs the scope `fit:compute`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getClearance"];
+        put?: never;
+        /**
+         * What the lower unit hides from each side, parts inline or by id
+         * @description Anyone; a key needs the scope `fit:compute`.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["askClearance"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * What the lower unit hides from each side, by catalog ids
-     * @description Anyone; a key needs the scope `fit:compute`.
-     */
-    get: operations['getClearance'];
-    put?: never;
-    /**
-     * What the lower unit hides from each side, parts inline or by id
-     * @description Anyone; a key needs the scope `fit:compute`.
-     */
-    post: operations['askClearance'];
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/fits': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/fits": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * The whole check of one fit
+         * @description Trim at the speed, the tilt it needs, what each side can see and what hides it, and what to do. A part is a catalog id or an inline record; missing values fall back to class defaults, named in `assumptions`. An estimate, not an approval; not for navigation.
+         *
+         *     Anyone; a key needs the scope `fit:compute`.
+         *
+         *     Costs 2 units, and 18 more with sampled uncertainty.
+         */
+        post: operations["askFit"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    get?: never;
-    put?: never;
-    /**
-     * The whole check of one fit
-     * @description Trim at the speed, the tilt it needs, what each side can see and what hides it, and what to do. A part is a catalog id or an inline record; missing values fall back to class defaults, named in `assumptions`. An estimate, not an approval; not for navigation.
-     *
-     *     Anyone; a key needs the scope `fit:compute`.
-     */
-    post: operations['askFit'];
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/session': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/session": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Who is signed in
+         * @description Anyone; not for API keys.
+         *
+         *     Costs nothing.
+         */
+        get: operations["getSession"];
+        put?: never;
+        /**
+         * Sign in
+         * @description Sets the session cookie. Ten wrong tries in 15 minutes are answered 429.
+         *
+         *     Anyone; not for API keys.
+         *
+         *     Costs nothing.
+         */
+        post: operations["signIn"];
+        /**
+         * Sign out
+         * @description Anyone; not for API keys.
+         *
+         *     Costs nothing.
+         */
+        delete: operations["signOut"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * Who is signed in
-     * @description Anyone; not for API keys.
-     */
-    get: operations['getSession'];
-    put?: never;
-    /**
-     * Sign in
-     * @description Sets the session cookie. Ten wrong tries in 15 minutes are answered 429.
-     *
-     *     Anyone; not for API keys.
-     */
-    post: operations['signIn'];
-    /**
-     * Sign out
-     * @description Anyone; not for API keys.
-     */
-    delete: operations['signOut'];
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/accounts': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/accounts": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Make an account and sign in
+         * @description Anyone; not for API keys.
+         *
+         *     Costs nothing.
+         */
+        post: operations["signUp"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    get?: never;
-    put?: never;
-    /**
-     * Make an account and sign in
-     * @description Anyone; not for API keys.
-     */
-    post: operations['signUp'];
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/me': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/me": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * The account that is signed in
+         * @description Whoever is signed in; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getMe"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * The account that is signed in
-     * @description Whoever is signed in; not for API keys.
-     */
-    get: operations['getMe'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/me/keys': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/me/keys": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * The account’s API keys, newest first
+         * @description Role integrator; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listKeys"];
+        put?: never;
+        /**
+         * Make an API key
+         * @description The whole key is in this answer alone; it is stored hashed. A browser key is bound to the origins of the pages that use it.
+         *
+         *     Role integrator; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["createKey"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * The account’s API keys, newest first
-     * @description Role integrator; not for API keys.
-     */
-    get: operations['listKeys'];
-    put?: never;
-    /**
-     * Make an API key
-     * @description The whole key is in this answer alone; it is stored hashed.
-     *
-     *     Role integrator; not for API keys.
-     */
-    post: operations['createKey'];
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/me/keys/{id}': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/me/keys/{id}/rotate": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Give an API key a new secret
+         * @description Id, scopes and usage stay. For the overlap both secrets work, so that a program can be moved to the new one at leisure.
+         *
+         *     Role integrator; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["rotateKey"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    get?: never;
-    put?: never;
-    post?: never;
-    /**
-     * Revoke an API key at once
-     * @description Role integrator; not for API keys.
-     */
-    delete: operations['revokeKey'];
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/me/boats': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/me/keys/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        post?: never;
+        /**
+         * Revoke an API key at once
+         * @description Role integrator; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["revokeKey"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * The account’s boats, each as the question its rig asks
-     * @description Role customer; a key needs the scope `boats:write`.
-     */
-    get: operations['listBoats'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/imports': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/me/usage": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * What each of the account’s keys asked for, day by day
+         * @description Oldest first; the last 30 days where no other span is named, 400 days at most. Days are UTC.
+         *
+         *     Role integrator; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listUsage"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * Imports, newest first
-     * @description Role steward; not for API keys.
-     */
-    get: operations['listImports'];
-    put?: never;
-    /**
-     * Upload a CSV table
-     * @description A form with `file` and `table`. A file that is no text table is refused and not kept.
-     *
-     *     Role steward; not for API keys.
-     */
-    post: operations['uploadImport'];
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/imports/{id}': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/limits": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * How much each kind of caller may ask
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listLimits"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * One import: status and counts
-     * @description Role steward; not for API keys.
-     */
-    get: operations['getImport'];
-    put?: never;
-    post?: never;
-    /**
-     * Discard an import that is not published
-     * @description Role steward; not for API keys.
-     */
-    delete: operations['discardImport'];
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/imports/{id}/check': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/limits/{caller}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        /**
+         * Change how much one kind of caller may ask
+         * @description Holds at once, also for minutes that have begun.
+         *
+         *     Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        put: operations["changeLimit"];
+        post?: never;
+        /**
+         * Go back to the configured limit
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["resetLimit"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    get?: never;
-    put?: never;
-    /**
-     * Work out every row’s fate
-     * @description Runs on after the answer; the import’s status is `checking` until it is `checked`.
-     *
-     *     Role steward; not for API keys.
-     */
-    post: operations['checkImport'];
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/imports/{id}/rows': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/me/boats": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * The account’s boats, each as the question its rig asks
+         * @description Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listBoats"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * Rows with their fates, in the file’s order
-     * @description Role steward; not for API keys.
-     */
-    get: operations['listImportRows'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/imports/{id}/errors.csv': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/imports": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Imports, newest first
+         * @description Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listImports"];
+        put?: never;
+        /**
+         * Upload a CSV table
+         * @description A form with `file` and `table`. A file that is no text table is refused and not kept.
+         *
+         *     Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["uploadImport"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    /**
-     * The wrong and conflicting rows as CSV, with a reason column
-     * @description Role steward; not for API keys.
-     */
-    get: operations['getImportErrors'];
-    put?: never;
-    post?: never;
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
-  '/imports/{id}/publish': {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
+    "/imports/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One import: status and counts
+         * @description Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getImport"];
+        put?: never;
+        post?: never;
+        /**
+         * Discard an import that is not published
+         * @description Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["discardImport"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
     };
-    get?: never;
-    put?: never;
-    /**
-     * Publish the new and changed rows as one edition
-     * @description All of them or none. Wrong, duplicate and conflicting rows are left out and stay listed; rows with cautions are published unless `holdCautions` is set.
-     *
-     *     Role steward; not for API keys.
-     */
-    post: operations['publishImport'];
-    delete?: never;
-    options?: never;
-    head?: never;
-    patch?: never;
-    trace?: never;
-  };
+    "/imports/{id}/check": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Work out every row’s fate
+         * @description Runs on after the answer; the import’s status is `checking` until it is `checked`.
+         *
+         *     Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["checkImport"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/imports/{id}/rows": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Rows with their fates, in the file’s order
+         * @description Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listImportRows"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/imports/{id}/errors.csv": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * The wrong and conflicting rows as CSV, with a reason column
+         * @description Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getImportErrors"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/imports/{id}/publish": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Publish the new and changed rows as one edition
+         * @description All of them or none. Wrong, duplicate and conflicting rows are left out and stay listed; rows with cautions are published unless `holdCautions` is set.
+         *
+         *     Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["publishImport"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
 }
 export type webhooks = Record<string, never>;
 export interface components {
-  schemas: {
-    Hull: {
-      /** @description Opaque, stable, sortable. */
-      id: string;
-      /** @description True for the generic parts whose every value is a class default. */
-      generic: boolean;
-      /** @description Grows by one with each published change of this record; its ETag. */
-      revision: number;
-      /** @description The edition that last changed this record. */
-      edition: number;
-      /** @enum {string} */
-      status: 'published' | 'superseded' | 'withdrawn';
-      supersededBy: string | null;
-      /** @description Maker. */
-      maker: string;
-      /** @description Model. */
-      model: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /**
-       * @description Form: flat, shallow-v, modified-v, deep-v, tri-hull, pontoon, catamaran, other.
-       * @enum {string}
-       */
-      form: 'flat' | 'shallow-v' | 'modified-v' | 'deep-v' | 'tri-hull' | 'pontoon' | 'catamaran' | 'other';
-      /** @description Length, m, 1.5 to 30. Length of the hull, without swim platform or motor. */
-      lengthM: number;
-      /** @description Beam, m, 0.5 to 8. Greatest width over all. */
-      beamM?: number;
-      /** @description Chine beam, m, 0.3 to 8. Width of the bottom between the chines, at the transom. */
-      chineBeamM?: number;
-      /** @description Deadrise, deg, 0 to 30. Angle of the bottom against level, at the transom. */
-      deadriseDeg?: number;
-      /** @description Transom angle, deg, -5 to 30. How far the top of the transom leans aft of square to the keel line. */
-      transomAngleDeg?: number;
-      /** @description Transom height, mm, 150 to 1500. From the keel to where the motor clamps, square to the keel line. */
-      transomHeightMm?: number;
-      /** @description Transom width, mm, 200 to 5000. */
-      transomWidthMm?: number;
-      /** @description Keel pad, mm, 0 to 1500. Full width of the flat at the keel; 0 where the bottom is a plain vee. */
-      keelPadMm?: number;
-      /** @description Trim tab chord, mm, 0 to 1000. */
-      tabChordMm?: number;
-      /** @description Trim tab span, 0 to 1. Span of both tabs together, as a share of the chine beam. */
-      tabSpanRatio?: number;
-      /** @description Notch, mm, 0 to 1500. How far the bottom ends ahead of the transom; 0 for none. */
-      notchMm?: number;
-      /** @description Steps, 0 to 5. */
-      steps?: number;
-      /** @description Strakes; between | in a CSV cell. */
-      strakes?: string[];
-      /**
-       * @description Material: aluminium, glass-fibre, wood, polyethylene, inflatable, steel, composite, other.
-       * @enum {string}
-       */
-      material?: 'aluminium' | 'glass-fibre' | 'wood' | 'polyethylene' | 'inflatable' | 'steel' | 'composite' | 'other';
-      /** @description Dry mass, kg, 15 to 30000. */
-      dryMassKg?: number;
-      /** @description Loaded mass, kg, 30 to 40000. As it is really run: motor, fuel, people, gear. */
-      loadedMassKg?: number;
-      /** @description Centre of gravity, ahead of the transom, m, 0.1 to 20. */
-      lcgM?: number;
-      /** @description Centre of gravity, above the keel, m, -0.5 to 4. */
-      vcgM?: number;
-      /** @description Greatest power, hp, 0 to 2000. */
-      maxPowerHp?: number;
-      /** @description Trim at rest, deg, -10 to 10. Bow up is positive. */
-      staticTrimDeg?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-    };
-    Problem: {
-      /** @description Address of the code’s description. */
-      type: string;
-      title: string;
-      status: number;
-      detail: string;
-      /** @description The request’s path and id. */
-      instance: string;
-      /** @enum {string} */
-      code:
-        | 'bad-request'
-        | 'malformed-json'
-        | 'invalid-input'
-        | 'unknown-parameter'
-        | 'sign-in-needed'
-        | 'session-expired'
-        | 'wrong-credentials'
-        | 'invalid-key'
-        | 'token-misplaced'
-        | 'not-allowed'
-        | 'scope-missing'
-        | 'foreign-origin'
-        | 'not-found'
-        | 'route-not-found'
-        | 'method-not-allowed'
-        | 'wrong-state'
-        | 'email-taken'
-        | 'stale-edition'
-        | 'body-too-large'
-        | 'unsupported-media-type'
-        | 'binary-file'
-        | 'wrong-encoding'
-        | 'no-header'
-        | 'bad-table'
-        | 'unknown-part'
-        | 'too-many-requests'
-        | 'internal-error'
-        | 'storage-full';
-      issues: components['schemas']['ProblemIssue'][];
-    };
-    ProblemIssue: {
-      /** @description JSON Pointer into the body, or the name of the parameter. */
-      path: string;
-      code: string;
-      message: string;
-    };
-    HullSheet: {
-      /** @description Opaque, stable, sortable. */
-      id: string;
-      /** @description True for the generic parts whose every value is a class default. */
-      generic: boolean;
-      /** @description Grows by one with each published change of this record; its ETag. */
-      revision: number;
-      /** @description The edition that last changed this record. */
-      edition: number;
-      /** @enum {string} */
-      status: 'published' | 'superseded' | 'withdrawn';
-      supersededBy: string | null;
-      /** @description Maker. */
-      maker: string;
-      /** @description Model. */
-      model: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /**
-       * @description Form: flat, shallow-v, modified-v, deep-v, tri-hull, pontoon, catamaran, other.
-       * @enum {string}
-       */
-      form: 'flat' | 'shallow-v' | 'modified-v' | 'deep-v' | 'tri-hull' | 'pontoon' | 'catamaran' | 'other';
-      /** @description Length, m, 1.5 to 30. Length of the hull, without swim platform or motor. */
-      lengthM: number;
-      /** @description Beam, m, 0.5 to 8. Greatest width over all. */
-      beamM?: number;
-      /** @description Chine beam, m, 0.3 to 8. Width of the bottom between the chines, at the transom. */
-      chineBeamM?: number;
-      /** @description Deadrise, deg, 0 to 30. Angle of the bottom against level, at the transom. */
-      deadriseDeg?: number;
-      /** @description Transom angle, deg, -5 to 30. How far the top of the transom leans aft of square to the keel line. */
-      transomAngleDeg?: number;
-      /** @description Transom height, mm, 150 to 1500. From the keel to where the motor clamps, square to the keel line. */
-      transomHeightMm?: number;
-      /** @description Transom width, mm, 200 to 5000. */
-      transomWidthMm?: number;
-      /** @description Keel pad, mm, 0 to 1500. Full width of the flat at the keel; 0 where the bottom is a plain vee. */
-      keelPadMm?: number;
-      /** @description Trim tab chord, mm, 0 to 1000. */
-      tabChordMm?: number;
-      /** @description Trim tab span, 0 to 1. Span of both tabs together, as a share of the chine beam. */
-      tabSpanRatio?: number;
-      /** @description Notch, mm, 0 to 1500. How far the bottom ends ahead of the transom; 0 for none. */
-      notchMm?: number;
-      /** @description Steps, 0 to 5. */
-      steps?: number;
-      /** @description Strakes; between | in a CSV cell. */
-      strakes?: string[];
-      /**
-       * @description Material: aluminium, glass-fibre, wood, polyethylene, inflatable, steel, composite, other.
-       * @enum {string}
-       */
-      material?: 'aluminium' | 'glass-fibre' | 'wood' | 'polyethylene' | 'inflatable' | 'steel' | 'composite' | 'other';
-      /** @description Dry mass, kg, 15 to 30000. */
-      dryMassKg?: number;
-      /** @description Loaded mass, kg, 30 to 40000. As it is really run: motor, fuel, people, gear. */
-      loadedMassKg?: number;
-      /** @description Centre of gravity, ahead of the transom, m, 0.1 to 20. */
-      lcgM?: number;
-      /** @description Centre of gravity, above the keel, m, -0.5 to 4. */
-      vcgM?: number;
-      /** @description Greatest power, hp, 0 to 2000. */
-      maxPowerHp?: number;
-      /** @description Trim at rest, deg, -10 to 10. Bow up is positive. */
-      staticTrimDeg?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-      values: {
-        [key: string]: components['schemas']['SourcedValue'];
-      };
-    };
-    SourcedValue: {
-      value: number | string | string[];
-      /**
-       * @description Where a value comes from, best first: measured, published, estimated, class (a class default).
-       * @enum {string}
-       */
-      basis: 'measured' | 'published' | 'estimated' | 'class';
-      /** @description One standard deviation, in the unit of the value; null where nobody stated one. */
-      sigma: number | null;
-      source: string | null;
-      sourceDate: string | null;
-    };
-    Revision: {
-      revision: number;
-      edition: number;
-      /** Format: date-time */
-      at: string;
-      actor: string;
-      why: string | null;
-      source: string | null;
-      changes: components['schemas']['FieldChange'][];
-    };
-    FieldChange: {
-      field: string;
-      before?: unknown;
-      after?: unknown;
-    };
-    LowerUnit: {
-      /** @description Opaque, stable, sortable. */
-      id: string;
-      /** @description True for the generic parts whose every value is a class default. */
-      generic: boolean;
-      /** @description Grows by one with each published change of this record; its ETag. */
-      revision: number;
-      /** @description The edition that last changed this record. */
-      edition: number;
-      /** @enum {string} */
-      status: 'published' | 'superseded' | 'withdrawn';
-      supersededBy: string | null;
-      /** @description Maker. */
-      maker: string;
-      /** @description Model. */
-      model: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /**
-       * @description Drive: outboard, sterndrive, kicker, electric.
-       * @enum {string}
-       */
-      drive: 'outboard' | 'sterndrive' | 'kicker' | 'electric';
-      /** @description Power, hp, 0.1 to 1000. */
-      powerHp: number;
-      /** @description Shaft length, mm, 200 to 1100. From the clamp to the anti-ventilation plate: 381, 508, 635 or 762 mm for 15, 20, 25 or 30 in. */
-      shaftLengthMm?: number;
-      /** @description Plate below keel, mm, -300 to 600. Sterndrive only: how far the anti-ventilation plate stands below the keel line. */
-      plateBelowKeelMm?: number;
-      /**
-       * @description Rotation: right, left, dual.
-       * @enum {string}
-       */
-      rotation?: 'right' | 'left' | 'dual';
-      /** @description Propeller diameter, mm, 80 to 700. */
-      propDiameterMm?: number;
-      /** @description Propeller depth along the shaft, mm, 5 to 400. */
-      propAxialMm?: number;
-      /** @description Propeller aft, mm, 0 to 900. Its middle, aft of the driveshaft axis. */
-      propAftMm?: number;
-      /** @description Blade area ratio, 0.05 to 1. */
-      bladeAreaRatio?: number;
-      /** @description Torpedo diameter, mm, 20 to 400. */
-      torpedoDiameterMm?: number;
-      /** @description Torpedo length, mm, 80 to 1600. */
-      torpedoLengthMm?: number;
-      /** @description Torpedo nose forward, mm, 0 to 1000. Of the driveshaft axis. */
-      torpedoNoseForwardMm?: number;
-      /** @description Plate above shaft, mm, 30 to 600. Anti-ventilation plate above the prop-shaft line. */
-      plateAboveShaftMm?: number;
-      /** @description Plate length, mm, 50 to 1200. */
-      plateLengthMm?: number;
-      /** @description Plate width, mm, 30 to 800. */
-      plateWidthMm?: number;
-      /** @description Plate thickness, mm, 1 to 60. */
-      plateThicknessMm?: number;
-      /** @description Plate forward, mm, -300 to 800. Its leading edge, ahead of the driveshaft axis. */
-      plateForwardMm?: number;
-      /** @description Strut chord, mm, 20 to 600. */
-      strutChordMm?: number;
-      /** @description Strut thickness, mm, 8 to 250. */
-      strutThicknessMm?: number;
-      /** @description Leg chord, mm, 20 to 800. */
-      legChordMm?: number;
-      /** @description Leg thickness, mm, 8 to 400. */
-      legThicknessMm?: number;
-      /** @description Skeg depth, mm, 0 to 700. Its lower edge below the prop-shaft line. */
-      skegDepthMm?: number;
-      /** @description Skeg chord, mm, 5 to 700. */
-      skegChordMm?: number;
-      /** @description Skeg thickness, mm, 1 to 60. */
-      skegThicknessMm?: number;
-      /** @description Skeg aft, mm, -400 to 600. Its middle, aft of the driveshaft axis. */
-      skegAftMm?: number;
-      /** @description Swivel axis aft, mm, -50 to 500. Of the clamp point. */
-      swivelAftMm?: number;
-      /** @description Driveshaft aft, mm, -50 to 700. Of the clamp point. */
-      driveshaftAftMm?: number;
-      /** @description Tilt axis aft, mm, -200 to 500. Of the clamp point. */
-      tiltAxisAftMm?: number;
-      /** @description Tilt axis above, mm, -300 to 500. The clamp point. */
-      tiltAxisAboveMm?: number;
-      /** @description Trim reference, deg, -5 to 30. Transom angle at which the trim limits are stated. */
-      trimRefTransomDeg?: number;
-      /** @description Least trim, deg, -30 to 10. */
-      trimMinDeg?: number;
-      /** @description Greatest trim under power, deg, -5 to 60. */
-      trimMaxDeg?: number;
-      /** @description Full tilt, deg, 0 to 110. */
-      tiltMaxDeg?: number;
-      /** @description Greatest steering angle, deg, 0 to 180. */
-      steerMaxDeg?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-    };
-    LowerUnitSheet: {
-      /** @description Opaque, stable, sortable. */
-      id: string;
-      /** @description True for the generic parts whose every value is a class default. */
-      generic: boolean;
-      /** @description Grows by one with each published change of this record; its ETag. */
-      revision: number;
-      /** @description The edition that last changed this record. */
-      edition: number;
-      /** @enum {string} */
-      status: 'published' | 'superseded' | 'withdrawn';
-      supersededBy: string | null;
-      /** @description Maker. */
-      maker: string;
-      /** @description Model. */
-      model: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /**
-       * @description Drive: outboard, sterndrive, kicker, electric.
-       * @enum {string}
-       */
-      drive: 'outboard' | 'sterndrive' | 'kicker' | 'electric';
-      /** @description Power, hp, 0.1 to 1000. */
-      powerHp: number;
-      /** @description Shaft length, mm, 200 to 1100. From the clamp to the anti-ventilation plate: 381, 508, 635 or 762 mm for 15, 20, 25 or 30 in. */
-      shaftLengthMm?: number;
-      /** @description Plate below keel, mm, -300 to 600. Sterndrive only: how far the anti-ventilation plate stands below the keel line. */
-      plateBelowKeelMm?: number;
-      /**
-       * @description Rotation: right, left, dual.
-       * @enum {string}
-       */
-      rotation?: 'right' | 'left' | 'dual';
-      /** @description Propeller diameter, mm, 80 to 700. */
-      propDiameterMm?: number;
-      /** @description Propeller depth along the shaft, mm, 5 to 400. */
-      propAxialMm?: number;
-      /** @description Propeller aft, mm, 0 to 900. Its middle, aft of the driveshaft axis. */
-      propAftMm?: number;
-      /** @description Blade area ratio, 0.05 to 1. */
-      bladeAreaRatio?: number;
-      /** @description Torpedo diameter, mm, 20 to 400. */
-      torpedoDiameterMm?: number;
-      /** @description Torpedo length, mm, 80 to 1600. */
-      torpedoLengthMm?: number;
-      /** @description Torpedo nose forward, mm, 0 to 1000. Of the driveshaft axis. */
-      torpedoNoseForwardMm?: number;
-      /** @description Plate above shaft, mm, 30 to 600. Anti-ventilation plate above the prop-shaft line. */
-      plateAboveShaftMm?: number;
-      /** @description Plate length, mm, 50 to 1200. */
-      plateLengthMm?: number;
-      /** @description Plate width, mm, 30 to 800. */
-      plateWidthMm?: number;
-      /** @description Plate thickness, mm, 1 to 60. */
-      plateThicknessMm?: number;
-      /** @description Plate forward, mm, -300 to 800. Its leading edge, ahead of the driveshaft axis. */
-      plateForwardMm?: number;
-      /** @description Strut chord, mm, 20 to 600. */
-      strutChordMm?: number;
-      /** @description Strut thickness, mm, 8 to 250. */
-      strutThicknessMm?: number;
-      /** @description Leg chord, mm, 20 to 800. */
-      legChordMm?: number;
-      /** @description Leg thickness, mm, 8 to 400. */
-      legThicknessMm?: number;
-      /** @description Skeg depth, mm, 0 to 700. Its lower edge below the prop-shaft line. */
-      skegDepthMm?: number;
-      /** @description Skeg chord, mm, 5 to 700. */
-      skegChordMm?: number;
-      /** @description Skeg thickness, mm, 1 to 60. */
-      skegThicknessMm?: number;
-      /** @description Skeg aft, mm, -400 to 600. Its middle, aft of the driveshaft axis. */
-      skegAftMm?: number;
-      /** @description Swivel axis aft, mm, -50 to 500. Of the clamp point. */
-      swivelAftMm?: number;
-      /** @description Driveshaft aft, mm, -50 to 700. Of the clamp point. */
-      driveshaftAftMm?: number;
-      /** @description Tilt axis aft, mm, -200 to 500. Of the clamp point. */
-      tiltAxisAftMm?: number;
-      /** @description Tilt axis above, mm, -300 to 500. The clamp point. */
-      tiltAxisAboveMm?: number;
-      /** @description Trim reference, deg, -5 to 30. Transom angle at which the trim limits are stated. */
-      trimRefTransomDeg?: number;
-      /** @description Least trim, deg, -30 to 10. */
-      trimMinDeg?: number;
-      /** @description Greatest trim under power, deg, -5 to 60. */
-      trimMaxDeg?: number;
-      /** @description Full tilt, deg, 0 to 110. */
-      tiltMaxDeg?: number;
-      /** @description Greatest steering angle, deg, 0 to 180. */
-      steerMaxDeg?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-      values: {
-        [key: string]: components['schemas']['SourcedValue'];
-      };
-    };
-    Transducer: {
-      /** @description Opaque, stable, sortable. */
-      id: string;
-      /** @description True for the generic parts whose every value is a class default. */
-      generic: boolean;
-      /** @description Grows by one with each published change of this record; its ETag. */
-      revision: number;
-      /** @description The edition that last changed this record. */
-      edition: number;
-      /** @enum {string} */
-      status: 'published' | 'superseded' | 'withdrawn';
-      supersededBy: string | null;
-      /** @description Maker. */
-      maker: string;
-      /** @description Model. */
-      model: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /** @description Housing length, mm, 30 to 900. Along the boat. */
-      housingLengthMm?: number;
-      /** @description Housing width, mm, 10 to 400. */
-      housingWidthMm?: number;
-      /** @description Housing height, mm, 5 to 300. */
-      housingHeightMm?: number;
-      /** @description Elements; between | in a CSV cell. */
-      kinds: ('side' | 'down' | 'cone')[];
-      /** @description Side frequency, khz, 20 to 3000. */
-      sideFrequencyKhz?: number;
-      /** @description Side axis depression, deg, 0 to 90. How far the middle of the side beam points below level. */
-      sideDepressionDeg?: number;
-      /** @description Side beam, vertical width, deg, 1 to 170. */
-      sideVerticalBeamDeg?: number;
-      /** @description Side beam, along the track, deg, 0.05 to 20. */
-      sideAlongBeamDeg?: number;
-      /** @description Side aperture, mm, 10 to 900. Length of the radiating face. */
-      sideApertureMm?: number;
-      /** @description Beam level, db, -20 to -1. Level at which the widths are stated; −3 where blank. */
-      beamLevelDb?: number;
-      /**
-       * @description Beam level, way: one, two.
-       * @enum {string}
-       */
-      beamLevelWay?: 'one' | 'two';
-      /** @description Down frequency, khz, 20 to 3000. */
-      downFrequencyKhz?: number;
-      /** @description Down beam, along, deg, 0.05 to 90. */
-      downAlongBeamDeg?: number;
-      /** @description Down beam, across, deg, 0.05 to 170. */
-      downAcrossBeamDeg?: number;
-      /** @description Cone width, deg, 1 to 120. */
-      coneBeamDeg?: number;
-      /** @description Mounts it can use; between | in a CSV cell. */
-      mountKinds?: (
-        | 'transom-bracket'
-        | 'kick-up-bracket'
-        | 'transom-board'
-        | 'through-hull'
-        | 'in-hull'
-        | 'pole'
-        | 'sensor-jack'
-        | 'bow-motor'
-      )[];
-      /** @description Greatest speed, kn, 0 to 120. */
-      maxSpeedKn?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-    };
-    TransducerSheet: {
-      /** @description Opaque, stable, sortable. */
-      id: string;
-      /** @description True for the generic parts whose every value is a class default. */
-      generic: boolean;
-      /** @description Grows by one with each published change of this record; its ETag. */
-      revision: number;
-      /** @description The edition that last changed this record. */
-      edition: number;
-      /** @enum {string} */
-      status: 'published' | 'superseded' | 'withdrawn';
-      supersededBy: string | null;
-      /** @description Maker. */
-      maker: string;
-      /** @description Model. */
-      model: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /** @description Housing length, mm, 30 to 900. Along the boat. */
-      housingLengthMm?: number;
-      /** @description Housing width, mm, 10 to 400. */
-      housingWidthMm?: number;
-      /** @description Housing height, mm, 5 to 300. */
-      housingHeightMm?: number;
-      /** @description Elements; between | in a CSV cell. */
-      kinds: ('side' | 'down' | 'cone')[];
-      /** @description Side frequency, khz, 20 to 3000. */
-      sideFrequencyKhz?: number;
-      /** @description Side axis depression, deg, 0 to 90. How far the middle of the side beam points below level. */
-      sideDepressionDeg?: number;
-      /** @description Side beam, vertical width, deg, 1 to 170. */
-      sideVerticalBeamDeg?: number;
-      /** @description Side beam, along the track, deg, 0.05 to 20. */
-      sideAlongBeamDeg?: number;
-      /** @description Side aperture, mm, 10 to 900. Length of the radiating face. */
-      sideApertureMm?: number;
-      /** @description Beam level, db, -20 to -1. Level at which the widths are stated; −3 where blank. */
-      beamLevelDb?: number;
-      /**
-       * @description Beam level, way: one, two.
-       * @enum {string}
-       */
-      beamLevelWay?: 'one' | 'two';
-      /** @description Down frequency, khz, 20 to 3000. */
-      downFrequencyKhz?: number;
-      /** @description Down beam, along, deg, 0.05 to 90. */
-      downAlongBeamDeg?: number;
-      /** @description Down beam, across, deg, 0.05 to 170. */
-      downAcrossBeamDeg?: number;
-      /** @description Cone width, deg, 1 to 120. */
-      coneBeamDeg?: number;
-      /** @description Mounts it can use; between | in a CSV cell. */
-      mountKinds?: (
-        | 'transom-bracket'
-        | 'kick-up-bracket'
-        | 'transom-board'
-        | 'through-hull'
-        | 'in-hull'
-        | 'pole'
-        | 'sensor-jack'
-        | 'bow-motor'
-      )[];
-      /** @description Greatest speed, kn, 0 to 120. */
-      maxSpeedKn?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-      values: {
-        [key: string]: components['schemas']['SourcedValue'];
-      };
-    };
-    Mount: {
-      /** @description Opaque, stable, sortable. */
-      id: string;
-      /** @description True for the generic parts whose every value is a class default. */
-      generic: boolean;
-      /** @description Grows by one with each published change of this record; its ETag. */
-      revision: number;
-      /** @description The edition that last changed this record. */
-      edition: number;
-      /** @enum {string} */
-      status: 'published' | 'superseded' | 'withdrawn';
-      supersededBy: string | null;
-      /** @description Maker. */
-      maker: string;
-      /** @description Model. */
-      model: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /**
-       * @description Kind: transom-bracket, kick-up-bracket, transom-board, through-hull, in-hull, pole, sensor-jack, bow-motor.
-       * @enum {string}
-       */
-      kind: 'transom-bracket' | 'kick-up-bracket' | 'transom-board' | 'through-hull' | 'in-hull' | 'pole' | 'sensor-jack' | 'bow-motor';
-      /** @description Least tilt on the scale, deg, -90 to 90. */
-      tiltMinDeg?: number;
-      /** @description Greatest tilt on the scale, deg, -90 to 90. */
-      tiltMaxDeg?: number;
-      /** @description Zero of the scale, deg, -45 to 45. How far nose-up from square to the transom face the axis stands when the scale reads 0. */
-      tiltZeroDeg?: number;
-      /** @description Step of the scale, deg, 0 to 45. */
-      tiltStepDeg?: number;
-      /** @description Least roll, deg, -90 to 90. */
-      rollMinDeg?: number;
-      /** @description Greatest roll, deg, -90 to 90. */
-      rollMaxDeg?: number;
-      /** @description Least height, mm, -1000 to 1000. */
-      heightMinMm?: number;
-      /** @description Greatest height, mm, -1000 to 2000. */
-      heightMaxMm?: number;
-      /** @description Standoff, mm, 0 to 1500. From the transom face to the housing’s leading edge, without any board. */
-      standoffMm?: number;
-      /** @description Board thickness, mm, 0 to 200. */
-      boardThicknessMm?: number;
-      /** @description Plate width, mm, 0 to 1500. */
-      plateWidthMm?: number;
-      /** @description Plate height, mm, 0 to 1500. */
-      plateHeightMm?: number;
-      /** @description Greatest speed, kn, 0 to 120. */
-      maxSpeedKn?: number;
-      /** @description Hull materials; between | in a CSV cell. */
-      hullMaterials?: ('aluminium' | 'glass-fibre' | 'wood' | 'polyethylene' | 'inflatable' | 'steel' | 'composite' | 'other')[];
-      /** @description Least deadrise, deg, 0 to 30. */
-      deadriseMinDeg?: number;
-      /** @description Greatest deadrise, deg, 0 to 30. */
-      deadriseMaxDeg?: number;
-      /** @description Longest housing, mm, 20 to 1200. */
-      housingLengthMaxMm?: number;
-      /** @description Widest housing, mm, 10 to 600. */
-      housingWidthMaxMm?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-    };
-    MountSheet: {
-      /** @description Opaque, stable, sortable. */
-      id: string;
-      /** @description True for the generic parts whose every value is a class default. */
-      generic: boolean;
-      /** @description Grows by one with each published change of this record; its ETag. */
-      revision: number;
-      /** @description The edition that last changed this record. */
-      edition: number;
-      /** @enum {string} */
-      status: 'published' | 'superseded' | 'withdrawn';
-      supersededBy: string | null;
-      /** @description Maker. */
-      maker: string;
-      /** @description Model. */
-      model: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /**
-       * @description Kind: transom-bracket, kick-up-bracket, transom-board, through-hull, in-hull, pole, sensor-jack, bow-motor.
-       * @enum {string}
-       */
-      kind: 'transom-bracket' | 'kick-up-bracket' | 'transom-board' | 'through-hull' | 'in-hull' | 'pole' | 'sensor-jack' | 'bow-motor';
-      /** @description Least tilt on the scale, deg, -90 to 90. */
-      tiltMinDeg?: number;
-      /** @description Greatest tilt on the scale, deg, -90 to 90. */
-      tiltMaxDeg?: number;
-      /** @description Zero of the scale, deg, -45 to 45. How far nose-up from square to the transom face the axis stands when the scale reads 0. */
-      tiltZeroDeg?: number;
-      /** @description Step of the scale, deg, 0 to 45. */
-      tiltStepDeg?: number;
-      /** @description Least roll, deg, -90 to 90. */
-      rollMinDeg?: number;
-      /** @description Greatest roll, deg, -90 to 90. */
-      rollMaxDeg?: number;
-      /** @description Least height, mm, -1000 to 1000. */
-      heightMinMm?: number;
-      /** @description Greatest height, mm, -1000 to 2000. */
-      heightMaxMm?: number;
-      /** @description Standoff, mm, 0 to 1500. From the transom face to the housing’s leading edge, without any board. */
-      standoffMm?: number;
-      /** @description Board thickness, mm, 0 to 200. */
-      boardThicknessMm?: number;
-      /** @description Plate width, mm, 0 to 1500. */
-      plateWidthMm?: number;
-      /** @description Plate height, mm, 0 to 1500. */
-      plateHeightMm?: number;
-      /** @description Greatest speed, kn, 0 to 120. */
-      maxSpeedKn?: number;
-      /** @description Hull materials; between | in a CSV cell. */
-      hullMaterials?: ('aluminium' | 'glass-fibre' | 'wood' | 'polyethylene' | 'inflatable' | 'steel' | 'composite' | 'other')[];
-      /** @description Least deadrise, deg, 0 to 30. */
-      deadriseMinDeg?: number;
-      /** @description Greatest deadrise, deg, 0 to 30. */
-      deadriseMaxDeg?: number;
-      /** @description Longest housing, mm, 20 to 1200. */
-      housingLengthMaxMm?: number;
-      /** @description Widest housing, mm, 10 to 600. */
-      housingWidthMaxMm?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-      values: {
-        [key: string]: components['schemas']['SourcedValue'];
-      };
-    };
-    TrimPoint: {
-      id: string;
-      /** @description Id of the hull. */
-      hull: string;
-      /** @description Speed, kn, 0 to 100. Through the water. */
-      speedKn: number;
-      /** @description Running trim, deg, -10 to 20. Bow up is positive. */
-      trimDeg: number;
-      /** @description Scatter, deg, 0 to 10. One standard deviation of the runs. */
-      sigmaDeg?: number;
-      /** @description Runs, 1 to 1000. */
-      runs?: number;
-      /** @description Loaded mass, kg, 30 to 40000. */
-      loadedMassKg?: number;
-      /** @description Motor trim, deg, -20 to 80. 0 with the prop shaft parallel to the keel line. */
-      motorTrimDeg?: number;
-      /** @description Condition. What else mattered: chop, two aboard, full tank. */
-      condition?: string;
-      /**
-       * @description Where a value comes from, best first: measured, published, estimated, class (a class default).
-       * @enum {string}
-       */
-      basis: 'measured' | 'published' | 'estimated' | 'class';
-      source: string | null;
-      sourceDate: string | null;
-      edition: number;
-    };
-    HullTrim: {
-      trim: components['schemas']['TrimAnswer'];
-      assumptions: components['schemas']['Assumption'][];
-      cautions: components['schemas']['CodedText'][];
-      engineVersion: string;
-      edition: number;
-    };
-    TrimAnswer: {
-      /** @description Running trim, bow up positive. */
-      valueDeg: number;
-      sigmaDeg: number;
-      /** @enum {string} */
-      basis: 'yours' | 'measured' | 'blended' | 'estimated' | 'class';
-      flags: string[];
-    };
-    Assumption: {
-      /** @description Where the value was missing, e.g. hull.deadriseDeg or lowerUnits.0.swivelAftMm. */
-      field: string;
-      value: number | string;
-      sigma: number | null;
-      why: string;
-    };
-    CodedText: {
-      code: string;
-      text: string;
-    };
-    SearchHit: {
-      /** @enum {string} */
-      kind: 'hulls' | 'lower-units' | 'transducers' | 'mounts';
-      id: string;
-      maker: string;
-      model: string;
-      package: string | null;
-      yearFrom: number | null;
-      yearTo: number | null;
-      generic: boolean;
-      /** @description Words of the question that were read as another spelling. */
-      corrected: string[];
-    };
-    Edition: {
-      edition: number;
-      /** Format: date-time */
-      publishedAt: string;
-      /** @description Opaque id of who published. */
-      actor: string;
-      why: string | null;
-      /** @description Records it added or changed. */
-      records: number;
-    };
-    Maker: {
-      name: string;
-    };
-    TiltReply: {
-      /** @description Echoed in the answer. */
-      ref?: string;
-      trim: components['schemas']['TrimAnswer'];
-      tilt: components['schemas']['TiltAnswer'];
-      assumptions: components['schemas']['Assumption'][];
-      cautions: components['schemas']['CodedText'][];
-      engineVersion: string;
-      edition: number;
-    };
-    TiltAnswer: {
-      /** @description Tilt against the keel line that gives the wanted attitude; nose-up (heel-down) positive. */
-      neededDeg: number;
-      interval90Deg: [number, number] | null;
-      /** @description Tilt the answer was computed with: the given one, or the needed one. */
-      setDeg: number;
-      /** @description Attitude in the water at the set tilt. */
-      attitudeDeg: number;
-      /** @description The needed tilt on the bracket’s own scale; null without a mount on the transom. */
-      bracketSettingDeg: number | null;
-      inBracketRange: boolean | null;
-      /** @description Wedge that brings the needed tilt into range: above 0 turns the sensor nose-up; 0 where none is needed. */
-      wedgeDeg: number | null;
-      /** @description Thickness of that wedge, mm per 100 mm of base. */
-      shimMmPer100: number | null;
-    };
-    TiltQuestion: {
-      /** @description Echoed in the answer. */
-      ref?: string;
-      hull: string | components['schemas']['InlineHull'];
-      mount?: string | components['schemas']['InlineMount'];
-      lowerUnit?: string | components['schemas']['InlineLowerUnit'];
-      /** @description Through the water. */
-      speedKn: number;
-      /**
-       * @description Wanted attitude in the water, nose-up positive.
-       * @default 0
-       */
-      targetDeg: number;
-      loadedMassKg?: number;
-      /** @description The boat’s own running trim, measured at this speed. */
-      measuredTrimDeg?: number;
-      measuredSigmaDeg?: number;
-      /**
-       * @description 0 with the prop shaft parallel to the keel line; swinging aft and up is positive.
-       * @default 0
-       */
-      motorTrimDeg: number;
-      /**
-       * @default fresh
-       * @enum {string}
-       */
-      water: 'fresh' | 'sea';
-    };
-    InlineHull: {
-      /** @description Maker. */
-      maker?: string;
-      /** @description Model. */
-      model?: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /**
-       * @description Form: flat, shallow-v, modified-v, deep-v, tri-hull, pontoon, catamaran, other.
-       * @enum {string}
-       */
-      form: 'flat' | 'shallow-v' | 'modified-v' | 'deep-v' | 'tri-hull' | 'pontoon' | 'catamaran' | 'other';
-      /** @description Length, m, 1.5 to 30. Length of the hull, without swim platform or motor. */
-      lengthM: number;
-      /** @description Beam, m, 0.5 to 8. Greatest width over all. */
-      beamM?: number;
-      /** @description Chine beam, m, 0.3 to 8. Width of the bottom between the chines, at the transom. */
-      chineBeamM?: number;
-      /** @description Deadrise, deg, 0 to 30. Angle of the bottom against level, at the transom. */
-      deadriseDeg?: number;
-      /** @description Transom angle, deg, -5 to 30. How far the top of the transom leans aft of square to the keel line. */
-      transomAngleDeg?: number;
-      /** @description Transom height, mm, 150 to 1500. From the keel to where the motor clamps, square to the keel line. */
-      transomHeightMm?: number;
-      /** @description Transom width, mm, 200 to 5000. */
-      transomWidthMm?: number;
-      /** @description Keel pad, mm, 0 to 1500. Full width of the flat at the keel; 0 where the bottom is a plain vee. */
-      keelPadMm?: number;
-      /** @description Trim tab chord, mm, 0 to 1000. */
-      tabChordMm?: number;
-      /** @description Trim tab span, 0 to 1. Span of both tabs together, as a share of the chine beam. */
-      tabSpanRatio?: number;
-      /** @description Notch, mm, 0 to 1500. How far the bottom ends ahead of the transom; 0 for none. */
-      notchMm?: number;
-      /** @description Steps, 0 to 5. */
-      steps?: number;
-      /** @description Strakes; between | in a CSV cell. */
-      strakes?: string[];
-      /**
-       * @description Material: aluminium, glass-fibre, wood, polyethylene, inflatable, steel, composite, other.
-       * @enum {string}
-       */
-      material?: 'aluminium' | 'glass-fibre' | 'wood' | 'polyethylene' | 'inflatable' | 'steel' | 'composite' | 'other';
-      /** @description Dry mass, kg, 15 to 30000. */
-      dryMassKg?: number;
-      /** @description Loaded mass, kg, 30 to 40000. As it is really run: motor, fuel, people, gear. */
-      loadedMassKg?: number;
-      /** @description Centre of gravity, ahead of the transom, m, 0.1 to 20. */
-      lcgM?: number;
-      /** @description Centre of gravity, above the keel, m, -0.5 to 4. */
-      vcgM?: number;
-      /** @description Greatest power, hp, 0 to 2000. */
-      maxPowerHp?: number;
-      /** @description Trim at rest, deg, -10 to 10. Bow up is positive. */
-      staticTrimDeg?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-      /** @description One standard deviation by field name, in that field’s unit. */
-      sigmas?: {
-        [key: string]: number;
-      };
-      trimPoints?: components['schemas']['InlineTrimPoint'][];
-    };
-    InlineTrimPoint: {
-      /** @description Speed, kn, 0 to 100. Through the water. */
-      speedKn: number;
-      /** @description Running trim, deg, -10 to 20. Bow up is positive. */
-      trimDeg: number;
-      /** @description Scatter, deg, 0 to 10. One standard deviation of the runs. */
-      sigmaDeg?: number;
-      /** @description Runs, 1 to 1000. */
-      runs?: number;
-      /** @description Loaded mass, kg, 30 to 40000. */
-      loadedMassKg?: number;
-      /** @description Motor trim, deg, -20 to 80. 0 with the prop shaft parallel to the keel line. */
-      motorTrimDeg?: number;
-    };
-    InlineMount: {
-      /** @description Maker. */
-      maker?: string;
-      /** @description Model. */
-      model?: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /**
-       * @description Kind: transom-bracket, kick-up-bracket, transom-board, through-hull, in-hull, pole, sensor-jack, bow-motor.
-       * @enum {string}
-       */
-      kind: 'transom-bracket' | 'kick-up-bracket' | 'transom-board' | 'through-hull' | 'in-hull' | 'pole' | 'sensor-jack' | 'bow-motor';
-      /** @description Least tilt on the scale, deg, -90 to 90. */
-      tiltMinDeg?: number;
-      /** @description Greatest tilt on the scale, deg, -90 to 90. */
-      tiltMaxDeg?: number;
-      /** @description Zero of the scale, deg, -45 to 45. How far nose-up from square to the transom face the axis stands when the scale reads 0. */
-      tiltZeroDeg?: number;
-      /** @description Step of the scale, deg, 0 to 45. */
-      tiltStepDeg?: number;
-      /** @description Least roll, deg, -90 to 90. */
-      rollMinDeg?: number;
-      /** @description Greatest roll, deg, -90 to 90. */
-      rollMaxDeg?: number;
-      /** @description Least height, mm, -1000 to 1000. */
-      heightMinMm?: number;
-      /** @description Greatest height, mm, -1000 to 2000. */
-      heightMaxMm?: number;
-      /** @description Standoff, mm, 0 to 1500. From the transom face to the housing’s leading edge, without any board. */
-      standoffMm?: number;
-      /** @description Board thickness, mm, 0 to 200. */
-      boardThicknessMm?: number;
-      /** @description Plate width, mm, 0 to 1500. */
-      plateWidthMm?: number;
-      /** @description Plate height, mm, 0 to 1500. */
-      plateHeightMm?: number;
-      /** @description Greatest speed, kn, 0 to 120. */
-      maxSpeedKn?: number;
-      /** @description Hull materials; between | in a CSV cell. */
-      hullMaterials?: ('aluminium' | 'glass-fibre' | 'wood' | 'polyethylene' | 'inflatable' | 'steel' | 'composite' | 'other')[];
-      /** @description Least deadrise, deg, 0 to 30. */
-      deadriseMinDeg?: number;
-      /** @description Greatest deadrise, deg, 0 to 30. */
-      deadriseMaxDeg?: number;
-      /** @description Longest housing, mm, 20 to 1200. */
-      housingLengthMaxMm?: number;
-      /** @description Widest housing, mm, 10 to 600. */
-      housingWidthMaxMm?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-      /** @description One standard deviation by field name, in that field’s unit. */
-      sigmas?: {
-        [key: string]: number;
-      };
-    };
-    InlineLowerUnit: {
-      /** @description Maker. */
-      maker?: string;
-      /** @description Model. */
-      model?: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /**
-       * @description Drive: outboard, sterndrive, kicker, electric.
-       * @enum {string}
-       */
-      drive: 'outboard' | 'sterndrive' | 'kicker' | 'electric';
-      /** @description Power, hp, 0.1 to 1000. */
-      powerHp: number;
-      /** @description Shaft length, mm, 200 to 1100. From the clamp to the anti-ventilation plate: 381, 508, 635 or 762 mm for 15, 20, 25 or 30 in. */
-      shaftLengthMm?: number;
-      /** @description Plate below keel, mm, -300 to 600. Sterndrive only: how far the anti-ventilation plate stands below the keel line. */
-      plateBelowKeelMm?: number;
-      /**
-       * @description Rotation: right, left, dual.
-       * @enum {string}
-       */
-      rotation?: 'right' | 'left' | 'dual';
-      /** @description Propeller diameter, mm, 80 to 700. */
-      propDiameterMm?: number;
-      /** @description Propeller depth along the shaft, mm, 5 to 400. */
-      propAxialMm?: number;
-      /** @description Propeller aft, mm, 0 to 900. Its middle, aft of the driveshaft axis. */
-      propAftMm?: number;
-      /** @description Blade area ratio, 0.05 to 1. */
-      bladeAreaRatio?: number;
-      /** @description Torpedo diameter, mm, 20 to 400. */
-      torpedoDiameterMm?: number;
-      /** @description Torpedo length, mm, 80 to 1600. */
-      torpedoLengthMm?: number;
-      /** @description Torpedo nose forward, mm, 0 to 1000. Of the driveshaft axis. */
-      torpedoNoseForwardMm?: number;
-      /** @description Plate above shaft, mm, 30 to 600. Anti-ventilation plate above the prop-shaft line. */
-      plateAboveShaftMm?: number;
-      /** @description Plate length, mm, 50 to 1200. */
-      plateLengthMm?: number;
-      /** @description Plate width, mm, 30 to 800. */
-      plateWidthMm?: number;
-      /** @description Plate thickness, mm, 1 to 60. */
-      plateThicknessMm?: number;
-      /** @description Plate forward, mm, -300 to 800. Its leading edge, ahead of the driveshaft axis. */
-      plateForwardMm?: number;
-      /** @description Strut chord, mm, 20 to 600. */
-      strutChordMm?: number;
-      /** @description Strut thickness, mm, 8 to 250. */
-      strutThicknessMm?: number;
-      /** @description Leg chord, mm, 20 to 800. */
-      legChordMm?: number;
-      /** @description Leg thickness, mm, 8 to 400. */
-      legThicknessMm?: number;
-      /** @description Skeg depth, mm, 0 to 700. Its lower edge below the prop-shaft line. */
-      skegDepthMm?: number;
-      /** @description Skeg chord, mm, 5 to 700. */
-      skegChordMm?: number;
-      /** @description Skeg thickness, mm, 1 to 60. */
-      skegThicknessMm?: number;
-      /** @description Skeg aft, mm, -400 to 600. Its middle, aft of the driveshaft axis. */
-      skegAftMm?: number;
-      /** @description Swivel axis aft, mm, -50 to 500. Of the clamp point. */
-      swivelAftMm?: number;
-      /** @description Driveshaft aft, mm, -50 to 700. Of the clamp point. */
-      driveshaftAftMm?: number;
-      /** @description Tilt axis aft, mm, -200 to 500. Of the clamp point. */
-      tiltAxisAftMm?: number;
-      /** @description Tilt axis above, mm, -300 to 500. The clamp point. */
-      tiltAxisAboveMm?: number;
-      /** @description Trim reference, deg, -5 to 30. Transom angle at which the trim limits are stated. */
-      trimRefTransomDeg?: number;
-      /** @description Least trim, deg, -30 to 10. */
-      trimMinDeg?: number;
-      /** @description Greatest trim under power, deg, -5 to 60. */
-      trimMaxDeg?: number;
-      /** @description Full tilt, deg, 0 to 110. */
-      tiltMaxDeg?: number;
-      /** @description Greatest steering angle, deg, 0 to 180. */
-      steerMaxDeg?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-      /** @description One standard deviation by field name, in that field’s unit. */
-      sigmas?: {
-        [key: string]: number;
-      };
-    };
-    ClearanceReply: {
-      /** @description Echoed in the answer. */
-      ref?: string;
-      clearance: components['schemas']['ClearanceAnswer'];
-      assumptions: components['schemas']['Assumption'][];
-      cautions: components['schemas']['CodedText'][];
-      engineVersion: string;
-      edition: number;
-    };
-    ClearanceAnswer: {
-      port: components['schemas']['SideAnswer'];
-      starboard: components['schemas']['SideAnswer'];
-      /** @description Tilts around the set one at which both sides are clear. */
-      tiltWindowDeg: [number, number] | null;
-      nearestClearTiltDeg: number | null;
-    };
-    SideAnswer: {
-      /** @enum {string} */
-      verdict: 'clear' | 'shaded' | 'blocked';
-      clearShare: number;
-      probabilityClear: number | null;
-      sectors: components['schemas']['Sector'][];
-      /** @description Smallest distance of the beam to any part but the hull within 5 m; 0 where something is hit; null where nothing is near. */
-      leastClearanceMm: number | null;
-      /** @description Clearance below which the edge of the beam is still disturbed, at the nearest part. */
-      diffractionMarginMm: number | null;
-    } | null;
-    Sector: {
-      /** @description Depression in the sensor frame. */
-      fromDeg: number;
-      toDeg: number;
-      /** @description Share of the side’s whole pattern weight that lies in this sector. */
-      share: number;
-      /** @enum {string} */
-      kind: 'hidden' | 'thinned';
-      by: {
-        /** @description Place of the engine in lowerUnits, from 0; null for an obstacle or the hull. */
-        unit: number | null;
+    schemas: {
+        Hull: {
+            /** @description Opaque, stable, sortable. */
+            id: string;
+            /** @description True for the generic parts whose every value is a class default. */
+            generic: boolean;
+            /** @description Grows by one with each published change of this record; its ETag. */
+            revision: number;
+            /** @description The edition that last changed this record. */
+            edition: number;
+            /** @enum {string} */
+            status: "published" | "superseded" | "withdrawn";
+            supersededBy: string | null;
+            /** @description Maker. */
+            maker: string;
+            /** @description Model. */
+            model: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /**
+             * @description Form: flat, shallow-v, modified-v, deep-v, tri-hull, pontoon, catamaran, other.
+             * @enum {string}
+             */
+            form: "flat" | "shallow-v" | "modified-v" | "deep-v" | "tri-hull" | "pontoon" | "catamaran" | "other";
+            /** @description Length, m, 1.5 to 30. Length of the hull, without swim platform or motor. */
+            lengthM: number;
+            /** @description Beam, m, 0.5 to 8. Greatest width over all. */
+            beamM?: number;
+            /** @description Chine beam, m, 0.3 to 8. Width of the bottom between the chines, at the transom. */
+            chineBeamM?: number;
+            /** @description Deadrise, deg, 0 to 30. Angle of the bottom against level, at the transom. */
+            deadriseDeg?: number;
+            /** @description Transom angle, deg, -5 to 30. How far the top of the transom leans aft of square to the keel line. */
+            transomAngleDeg?: number;
+            /** @description Transom height, mm, 150 to 1500. From the keel to where the motor clamps, square to the keel line. */
+            transomHeightMm?: number;
+            /** @description Transom width, mm, 200 to 5000. */
+            transomWidthMm?: number;
+            /** @description Keel pad, mm, 0 to 1500. Full width of the flat at the keel; 0 where the bottom is a plain vee. */
+            keelPadMm?: number;
+            /** @description Trim tab chord, mm, 0 to 1000. */
+            tabChordMm?: number;
+            /** @description Trim tab span, 0 to 1. Span of both tabs together, as a share of the chine beam. */
+            tabSpanRatio?: number;
+            /** @description Notch, mm, 0 to 1500. How far the bottom ends ahead of the transom; 0 for none. */
+            notchMm?: number;
+            /** @description Steps, 0 to 5. */
+            steps?: number;
+            /** @description Strakes; between | in a CSV cell. */
+            strakes?: string[];
+            /**
+             * @description Material: aluminium, glass-fibre, wood, polyethylene, inflatable, steel, composite, other.
+             * @enum {string}
+             */
+            material?: "aluminium" | "glass-fibre" | "wood" | "polyethylene" | "inflatable" | "steel" | "composite" | "other";
+            /** @description Dry mass, kg, 15 to 30000. */
+            dryMassKg?: number;
+            /** @description Loaded mass, kg, 30 to 40000. As it is really run: motor, fuel, people, gear. */
+            loadedMassKg?: number;
+            /** @description Centre of gravity, ahead of the transom, m, 0.1 to 20. */
+            lcgM?: number;
+            /** @description Centre of gravity, above the keel, m, -0.5 to 4. */
+            vcgM?: number;
+            /** @description Greatest power, hp, 0 to 2000. */
+            maxPowerHp?: number;
+            /** @description Trim at rest, deg, -10 to 10. Bow up is positive. */
+            staticTrimDeg?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+        };
+        Problem: {
+            /** @description Address of the code’s description. */
+            type: string;
+            title: string;
+            status: number;
+            detail: string;
+            /** @description The request’s path and id. */
+            instance: string;
+            /** @enum {string} */
+            code: "bad-request" | "malformed-json" | "invalid-input" | "unknown-parameter" | "sign-in-needed" | "session-expired" | "wrong-credentials" | "invalid-key" | "token-misplaced" | "not-allowed" | "scope-missing" | "foreign-origin" | "not-found" | "route-not-found" | "method-not-allowed" | "wrong-state" | "email-taken" | "stale-edition" | "already-created" | "idempotency-at-work" | "idempotency-mismatch" | "stale-revision" | "body-too-large" | "unsupported-media-type" | "binary-file" | "wrong-encoding" | "no-header" | "bad-table" | "incomplete-mapping" | "unknown-part" | "too-many-requests" | "internal-error" | "storage-full";
+            issues: components["schemas"]["ProblemIssue"][];
+        };
+        ProblemIssue: {
+            /** @description JSON Pointer into the body, or the name of the parameter. */
+            path: string;
+            code: string;
+            message: string;
+        };
+        HullSheet: {
+            /** @description Opaque, stable, sortable. */
+            id: string;
+            /** @description True for the generic parts whose every value is a class default. */
+            generic: boolean;
+            /** @description Grows by one with each published change of this record; its ETag. */
+            revision: number;
+            /** @description The edition that last changed this record. */
+            edition: number;
+            /** @enum {string} */
+            status: "published" | "superseded" | "withdrawn";
+            supersededBy: string | null;
+            /** @description Maker. */
+            maker: string;
+            /** @description Model. */
+            model: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /**
+             * @description Form: flat, shallow-v, modified-v, deep-v, tri-hull, pontoon, catamaran, other.
+             * @enum {string}
+             */
+            form: "flat" | "shallow-v" | "modified-v" | "deep-v" | "tri-hull" | "pontoon" | "catamaran" | "other";
+            /** @description Length, m, 1.5 to 30. Length of the hull, without swim platform or motor. */
+            lengthM: number;
+            /** @description Beam, m, 0.5 to 8. Greatest width over all. */
+            beamM?: number;
+            /** @description Chine beam, m, 0.3 to 8. Width of the bottom between the chines, at the transom. */
+            chineBeamM?: number;
+            /** @description Deadrise, deg, 0 to 30. Angle of the bottom against level, at the transom. */
+            deadriseDeg?: number;
+            /** @description Transom angle, deg, -5 to 30. How far the top of the transom leans aft of square to the keel line. */
+            transomAngleDeg?: number;
+            /** @description Transom height, mm, 150 to 1500. From the keel to where the motor clamps, square to the keel line. */
+            transomHeightMm?: number;
+            /** @description Transom width, mm, 200 to 5000. */
+            transomWidthMm?: number;
+            /** @description Keel pad, mm, 0 to 1500. Full width of the flat at the keel; 0 where the bottom is a plain vee. */
+            keelPadMm?: number;
+            /** @description Trim tab chord, mm, 0 to 1000. */
+            tabChordMm?: number;
+            /** @description Trim tab span, 0 to 1. Span of both tabs together, as a share of the chine beam. */
+            tabSpanRatio?: number;
+            /** @description Notch, mm, 0 to 1500. How far the bottom ends ahead of the transom; 0 for none. */
+            notchMm?: number;
+            /** @description Steps, 0 to 5. */
+            steps?: number;
+            /** @description Strakes; between | in a CSV cell. */
+            strakes?: string[];
+            /**
+             * @description Material: aluminium, glass-fibre, wood, polyethylene, inflatable, steel, composite, other.
+             * @enum {string}
+             */
+            material?: "aluminium" | "glass-fibre" | "wood" | "polyethylene" | "inflatable" | "steel" | "composite" | "other";
+            /** @description Dry mass, kg, 15 to 30000. */
+            dryMassKg?: number;
+            /** @description Loaded mass, kg, 30 to 40000. As it is really run: motor, fuel, people, gear. */
+            loadedMassKg?: number;
+            /** @description Centre of gravity, ahead of the transom, m, 0.1 to 20. */
+            lcgM?: number;
+            /** @description Centre of gravity, above the keel, m, -0.5 to 4. */
+            vcgM?: number;
+            /** @description Greatest power, hp, 0 to 2000. */
+            maxPowerHp?: number;
+            /** @description Trim at rest, deg, -10 to 10. Bow up is positive. */
+            staticTrimDeg?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+            values: {
+                [key: string]: components["schemas"]["SourcedValue"];
+            };
+        };
+        SourcedValue: {
+            value: number | string | string[];
+            /**
+             * @description Where a value comes from, best first: measured, published, estimated, class (a class default).
+             * @enum {string}
+             */
+            basis: "measured" | "published" | "estimated" | "class";
+            /** @description One standard deviation, in the unit of the value; null where nobody stated one. */
+            sigma: number | null;
+            source: string | null;
+            sourceDate: string | null;
+        };
+        Revision: {
+            revision: number;
+            edition: number;
+            /** Format: date-time */
+            at: string;
+            actor: string;
+            why: string | null;
+            source: string | null;
+            changes: components["schemas"]["FieldChange"][];
+        };
+        FieldChange: {
+            field: string;
+            before?: unknown;
+            after?: unknown;
+        };
+        LowerUnit: {
+            /** @description Opaque, stable, sortable. */
+            id: string;
+            /** @description True for the generic parts whose every value is a class default. */
+            generic: boolean;
+            /** @description Grows by one with each published change of this record; its ETag. */
+            revision: number;
+            /** @description The edition that last changed this record. */
+            edition: number;
+            /** @enum {string} */
+            status: "published" | "superseded" | "withdrawn";
+            supersededBy: string | null;
+            /** @description Maker. */
+            maker: string;
+            /** @description Model. */
+            model: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /**
+             * @description Drive: outboard, sterndrive, kicker, electric.
+             * @enum {string}
+             */
+            drive: "outboard" | "sterndrive" | "kicker" | "electric";
+            /** @description Power, hp, 0.1 to 1000. */
+            powerHp: number;
+            /** @description Shaft length, mm, 200 to 1100. From the clamp to the anti-ventilation plate: 381, 508, 635 or 762 mm for 15, 20, 25 or 30 in. */
+            shaftLengthMm?: number;
+            /** @description Plate below keel, mm, -300 to 600. Sterndrive only: how far the anti-ventilation plate stands below the keel line. */
+            plateBelowKeelMm?: number;
+            /**
+             * @description Rotation: right, left, dual.
+             * @enum {string}
+             */
+            rotation?: "right" | "left" | "dual";
+            /** @description Propeller diameter, mm, 80 to 700. */
+            propDiameterMm?: number;
+            /** @description Propeller depth along the shaft, mm, 5 to 400. */
+            propAxialMm?: number;
+            /** @description Propeller aft, mm, 0 to 900. Its middle, aft of the driveshaft axis. */
+            propAftMm?: number;
+            /** @description Blade area ratio, 0.05 to 1. */
+            bladeAreaRatio?: number;
+            /** @description Torpedo diameter, mm, 20 to 400. */
+            torpedoDiameterMm?: number;
+            /** @description Torpedo length, mm, 80 to 1600. */
+            torpedoLengthMm?: number;
+            /** @description Torpedo nose forward, mm, 0 to 1000. Of the driveshaft axis. */
+            torpedoNoseForwardMm?: number;
+            /** @description Plate above shaft, mm, 30 to 600. Anti-ventilation plate above the prop-shaft line. */
+            plateAboveShaftMm?: number;
+            /** @description Plate length, mm, 50 to 1200. */
+            plateLengthMm?: number;
+            /** @description Plate width, mm, 30 to 800. */
+            plateWidthMm?: number;
+            /** @description Plate thickness, mm, 1 to 60. */
+            plateThicknessMm?: number;
+            /** @description Plate forward, mm, -300 to 800. Its leading edge, ahead of the driveshaft axis. */
+            plateForwardMm?: number;
+            /** @description Strut chord, mm, 20 to 600. */
+            strutChordMm?: number;
+            /** @description Strut thickness, mm, 8 to 250. */
+            strutThicknessMm?: number;
+            /** @description Leg chord, mm, 20 to 800. */
+            legChordMm?: number;
+            /** @description Leg thickness, mm, 8 to 400. */
+            legThicknessMm?: number;
+            /** @description Skeg depth, mm, 0 to 700. Its lower edge below the prop-shaft line. */
+            skegDepthMm?: number;
+            /** @description Skeg chord, mm, 5 to 700. */
+            skegChordMm?: number;
+            /** @description Skeg thickness, mm, 1 to 60. */
+            skegThicknessMm?: number;
+            /** @description Skeg aft, mm, -400 to 600. Its middle, aft of the driveshaft axis. */
+            skegAftMm?: number;
+            /** @description Swivel axis aft, mm, -50 to 500. Of the clamp point. */
+            swivelAftMm?: number;
+            /** @description Driveshaft aft, mm, -50 to 700. Of the clamp point. */
+            driveshaftAftMm?: number;
+            /** @description Tilt axis aft, mm, -200 to 500. Of the clamp point. */
+            tiltAxisAftMm?: number;
+            /** @description Tilt axis above, mm, -300 to 500. The clamp point. */
+            tiltAxisAboveMm?: number;
+            /** @description Trim reference, deg, -5 to 30. Transom angle at which the trim limits are stated. */
+            trimRefTransomDeg?: number;
+            /** @description Least trim, deg, -30 to 10. */
+            trimMinDeg?: number;
+            /** @description Greatest trim under power, deg, -5 to 60. */
+            trimMaxDeg?: number;
+            /** @description Full tilt, deg, 0 to 110. */
+            tiltMaxDeg?: number;
+            /** @description Greatest steering angle, deg, 0 to 180. */
+            steerMaxDeg?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+        };
+        LowerUnitSheet: {
+            /** @description Opaque, stable, sortable. */
+            id: string;
+            /** @description True for the generic parts whose every value is a class default. */
+            generic: boolean;
+            /** @description Grows by one with each published change of this record; its ETag. */
+            revision: number;
+            /** @description The edition that last changed this record. */
+            edition: number;
+            /** @enum {string} */
+            status: "published" | "superseded" | "withdrawn";
+            supersededBy: string | null;
+            /** @description Maker. */
+            maker: string;
+            /** @description Model. */
+            model: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /**
+             * @description Drive: outboard, sterndrive, kicker, electric.
+             * @enum {string}
+             */
+            drive: "outboard" | "sterndrive" | "kicker" | "electric";
+            /** @description Power, hp, 0.1 to 1000. */
+            powerHp: number;
+            /** @description Shaft length, mm, 200 to 1100. From the clamp to the anti-ventilation plate: 381, 508, 635 or 762 mm for 15, 20, 25 or 30 in. */
+            shaftLengthMm?: number;
+            /** @description Plate below keel, mm, -300 to 600. Sterndrive only: how far the anti-ventilation plate stands below the keel line. */
+            plateBelowKeelMm?: number;
+            /**
+             * @description Rotation: right, left, dual.
+             * @enum {string}
+             */
+            rotation?: "right" | "left" | "dual";
+            /** @description Propeller diameter, mm, 80 to 700. */
+            propDiameterMm?: number;
+            /** @description Propeller depth along the shaft, mm, 5 to 400. */
+            propAxialMm?: number;
+            /** @description Propeller aft, mm, 0 to 900. Its middle, aft of the driveshaft axis. */
+            propAftMm?: number;
+            /** @description Blade area ratio, 0.05 to 1. */
+            bladeAreaRatio?: number;
+            /** @description Torpedo diameter, mm, 20 to 400. */
+            torpedoDiameterMm?: number;
+            /** @description Torpedo length, mm, 80 to 1600. */
+            torpedoLengthMm?: number;
+            /** @description Torpedo nose forward, mm, 0 to 1000. Of the driveshaft axis. */
+            torpedoNoseForwardMm?: number;
+            /** @description Plate above shaft, mm, 30 to 600. Anti-ventilation plate above the prop-shaft line. */
+            plateAboveShaftMm?: number;
+            /** @description Plate length, mm, 50 to 1200. */
+            plateLengthMm?: number;
+            /** @description Plate width, mm, 30 to 800. */
+            plateWidthMm?: number;
+            /** @description Plate thickness, mm, 1 to 60. */
+            plateThicknessMm?: number;
+            /** @description Plate forward, mm, -300 to 800. Its leading edge, ahead of the driveshaft axis. */
+            plateForwardMm?: number;
+            /** @description Strut chord, mm, 20 to 600. */
+            strutChordMm?: number;
+            /** @description Strut thickness, mm, 8 to 250. */
+            strutThicknessMm?: number;
+            /** @description Leg chord, mm, 20 to 800. */
+            legChordMm?: number;
+            /** @description Leg thickness, mm, 8 to 400. */
+            legThicknessMm?: number;
+            /** @description Skeg depth, mm, 0 to 700. Its lower edge below the prop-shaft line. */
+            skegDepthMm?: number;
+            /** @description Skeg chord, mm, 5 to 700. */
+            skegChordMm?: number;
+            /** @description Skeg thickness, mm, 1 to 60. */
+            skegThicknessMm?: number;
+            /** @description Skeg aft, mm, -400 to 600. Its middle, aft of the driveshaft axis. */
+            skegAftMm?: number;
+            /** @description Swivel axis aft, mm, -50 to 500. Of the clamp point. */
+            swivelAftMm?: number;
+            /** @description Driveshaft aft, mm, -50 to 700. Of the clamp point. */
+            driveshaftAftMm?: number;
+            /** @description Tilt axis aft, mm, -200 to 500. Of the clamp point. */
+            tiltAxisAftMm?: number;
+            /** @description Tilt axis above, mm, -300 to 500. The clamp point. */
+            tiltAxisAboveMm?: number;
+            /** @description Trim reference, deg, -5 to 30. Transom angle at which the trim limits are stated. */
+            trimRefTransomDeg?: number;
+            /** @description Least trim, deg, -30 to 10. */
+            trimMinDeg?: number;
+            /** @description Greatest trim under power, deg, -5 to 60. */
+            trimMaxDeg?: number;
+            /** @description Full tilt, deg, 0 to 110. */
+            tiltMaxDeg?: number;
+            /** @description Greatest steering angle, deg, 0 to 180. */
+            steerMaxDeg?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+            values: {
+                [key: string]: components["schemas"]["SourcedValue"];
+            };
+        };
+        Transducer: {
+            /** @description Opaque, stable, sortable. */
+            id: string;
+            /** @description True for the generic parts whose every value is a class default. */
+            generic: boolean;
+            /** @description Grows by one with each published change of this record; its ETag. */
+            revision: number;
+            /** @description The edition that last changed this record. */
+            edition: number;
+            /** @enum {string} */
+            status: "published" | "superseded" | "withdrawn";
+            supersededBy: string | null;
+            /** @description Maker. */
+            maker: string;
+            /** @description Model. */
+            model: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /** @description Housing length, mm, 30 to 900. Along the boat. */
+            housingLengthMm?: number;
+            /** @description Housing width, mm, 10 to 400. */
+            housingWidthMm?: number;
+            /** @description Housing height, mm, 5 to 300. */
+            housingHeightMm?: number;
+            /** @description Elements; between | in a CSV cell. */
+            kinds: ("side" | "down" | "cone")[];
+            /** @description Side frequency, khz, 20 to 3000. */
+            sideFrequencyKhz?: number;
+            /** @description Side axis depression, deg, 0 to 90. How far the middle of the side beam points below level. */
+            sideDepressionDeg?: number;
+            /** @description Side beam, vertical width, deg, 1 to 170. */
+            sideVerticalBeamDeg?: number;
+            /** @description Side beam, along the track, deg, 0.05 to 20. */
+            sideAlongBeamDeg?: number;
+            /** @description Side aperture, mm, 10 to 900. Length of the radiating face. */
+            sideApertureMm?: number;
+            /** @description Beam level, db, -20 to -1. Level at which the widths are stated; −3 where blank. */
+            beamLevelDb?: number;
+            /**
+             * @description Beam level, way: one, two.
+             * @enum {string}
+             */
+            beamLevelWay?: "one" | "two";
+            /** @description Down frequency, khz, 20 to 3000. */
+            downFrequencyKhz?: number;
+            /** @description Down beam, along, deg, 0.05 to 90. */
+            downAlongBeamDeg?: number;
+            /** @description Down beam, across, deg, 0.05 to 170. */
+            downAcrossBeamDeg?: number;
+            /** @description Cone width, deg, 1 to 120. */
+            coneBeamDeg?: number;
+            /** @description Mounts it can use; between | in a CSV cell. */
+            mountKinds?: ("transom-bracket" | "kick-up-bracket" | "transom-board" | "through-hull" | "in-hull" | "pole" | "sensor-jack" | "bow-motor")[];
+            /** @description Greatest speed, kn, 0 to 120. */
+            maxSpeedKn?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+        };
+        TransducerSheet: {
+            /** @description Opaque, stable, sortable. */
+            id: string;
+            /** @description True for the generic parts whose every value is a class default. */
+            generic: boolean;
+            /** @description Grows by one with each published change of this record; its ETag. */
+            revision: number;
+            /** @description The edition that last changed this record. */
+            edition: number;
+            /** @enum {string} */
+            status: "published" | "superseded" | "withdrawn";
+            supersededBy: string | null;
+            /** @description Maker. */
+            maker: string;
+            /** @description Model. */
+            model: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /** @description Housing length, mm, 30 to 900. Along the boat. */
+            housingLengthMm?: number;
+            /** @description Housing width, mm, 10 to 400. */
+            housingWidthMm?: number;
+            /** @description Housing height, mm, 5 to 300. */
+            housingHeightMm?: number;
+            /** @description Elements; between | in a CSV cell. */
+            kinds: ("side" | "down" | "cone")[];
+            /** @description Side frequency, khz, 20 to 3000. */
+            sideFrequencyKhz?: number;
+            /** @description Side axis depression, deg, 0 to 90. How far the middle of the side beam points below level. */
+            sideDepressionDeg?: number;
+            /** @description Side beam, vertical width, deg, 1 to 170. */
+            sideVerticalBeamDeg?: number;
+            /** @description Side beam, along the track, deg, 0.05 to 20. */
+            sideAlongBeamDeg?: number;
+            /** @description Side aperture, mm, 10 to 900. Length of the radiating face. */
+            sideApertureMm?: number;
+            /** @description Beam level, db, -20 to -1. Level at which the widths are stated; −3 where blank. */
+            beamLevelDb?: number;
+            /**
+             * @description Beam level, way: one, two.
+             * @enum {string}
+             */
+            beamLevelWay?: "one" | "two";
+            /** @description Down frequency, khz, 20 to 3000. */
+            downFrequencyKhz?: number;
+            /** @description Down beam, along, deg, 0.05 to 90. */
+            downAlongBeamDeg?: number;
+            /** @description Down beam, across, deg, 0.05 to 170. */
+            downAcrossBeamDeg?: number;
+            /** @description Cone width, deg, 1 to 120. */
+            coneBeamDeg?: number;
+            /** @description Mounts it can use; between | in a CSV cell. */
+            mountKinds?: ("transom-bracket" | "kick-up-bracket" | "transom-board" | "through-hull" | "in-hull" | "pole" | "sensor-jack" | "bow-motor")[];
+            /** @description Greatest speed, kn, 0 to 120. */
+            maxSpeedKn?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+            values: {
+                [key: string]: components["schemas"]["SourcedValue"];
+            };
+        };
+        Mount: {
+            /** @description Opaque, stable, sortable. */
+            id: string;
+            /** @description True for the generic parts whose every value is a class default. */
+            generic: boolean;
+            /** @description Grows by one with each published change of this record; its ETag. */
+            revision: number;
+            /** @description The edition that last changed this record. */
+            edition: number;
+            /** @enum {string} */
+            status: "published" | "superseded" | "withdrawn";
+            supersededBy: string | null;
+            /** @description Maker. */
+            maker: string;
+            /** @description Model. */
+            model: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /**
+             * @description Kind: transom-bracket, kick-up-bracket, transom-board, through-hull, in-hull, pole, sensor-jack, bow-motor.
+             * @enum {string}
+             */
+            kind: "transom-bracket" | "kick-up-bracket" | "transom-board" | "through-hull" | "in-hull" | "pole" | "sensor-jack" | "bow-motor";
+            /** @description Least tilt on the scale, deg, -90 to 90. */
+            tiltMinDeg?: number;
+            /** @description Greatest tilt on the scale, deg, -90 to 90. */
+            tiltMaxDeg?: number;
+            /** @description Zero of the scale, deg, -45 to 45. How far nose-up from square to the transom face the axis stands when the scale reads 0. */
+            tiltZeroDeg?: number;
+            /** @description Step of the scale, deg, 0 to 45. */
+            tiltStepDeg?: number;
+            /** @description Least roll, deg, -90 to 90. */
+            rollMinDeg?: number;
+            /** @description Greatest roll, deg, -90 to 90. */
+            rollMaxDeg?: number;
+            /** @description Least height, mm, -1000 to 1000. */
+            heightMinMm?: number;
+            /** @description Greatest height, mm, -1000 to 2000. */
+            heightMaxMm?: number;
+            /** @description Standoff, mm, 0 to 1500. From the transom face to the housing’s leading edge, without any board. */
+            standoffMm?: number;
+            /** @description Board thickness, mm, 0 to 200. */
+            boardThicknessMm?: number;
+            /** @description Plate width, mm, 0 to 1500. */
+            plateWidthMm?: number;
+            /** @description Plate height, mm, 0 to 1500. */
+            plateHeightMm?: number;
+            /** @description Greatest speed, kn, 0 to 120. */
+            maxSpeedKn?: number;
+            /** @description Hull materials; between | in a CSV cell. */
+            hullMaterials?: ("aluminium" | "glass-fibre" | "wood" | "polyethylene" | "inflatable" | "steel" | "composite" | "other")[];
+            /** @description Least deadrise, deg, 0 to 30. */
+            deadriseMinDeg?: number;
+            /** @description Greatest deadrise, deg, 0 to 30. */
+            deadriseMaxDeg?: number;
+            /** @description Longest housing, mm, 20 to 1200. */
+            housingLengthMaxMm?: number;
+            /** @description Widest housing, mm, 10 to 600. */
+            housingWidthMaxMm?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+        };
+        MountSheet: {
+            /** @description Opaque, stable, sortable. */
+            id: string;
+            /** @description True for the generic parts whose every value is a class default. */
+            generic: boolean;
+            /** @description Grows by one with each published change of this record; its ETag. */
+            revision: number;
+            /** @description The edition that last changed this record. */
+            edition: number;
+            /** @enum {string} */
+            status: "published" | "superseded" | "withdrawn";
+            supersededBy: string | null;
+            /** @description Maker. */
+            maker: string;
+            /** @description Model. */
+            model: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /**
+             * @description Kind: transom-bracket, kick-up-bracket, transom-board, through-hull, in-hull, pole, sensor-jack, bow-motor.
+             * @enum {string}
+             */
+            kind: "transom-bracket" | "kick-up-bracket" | "transom-board" | "through-hull" | "in-hull" | "pole" | "sensor-jack" | "bow-motor";
+            /** @description Least tilt on the scale, deg, -90 to 90. */
+            tiltMinDeg?: number;
+            /** @description Greatest tilt on the scale, deg, -90 to 90. */
+            tiltMaxDeg?: number;
+            /** @description Zero of the scale, deg, -45 to 45. How far nose-up from square to the transom face the axis stands when the scale reads 0. */
+            tiltZeroDeg?: number;
+            /** @description Step of the scale, deg, 0 to 45. */
+            tiltStepDeg?: number;
+            /** @description Least roll, deg, -90 to 90. */
+            rollMinDeg?: number;
+            /** @description Greatest roll, deg, -90 to 90. */
+            rollMaxDeg?: number;
+            /** @description Least height, mm, -1000 to 1000. */
+            heightMinMm?: number;
+            /** @description Greatest height, mm, -1000 to 2000. */
+            heightMaxMm?: number;
+            /** @description Standoff, mm, 0 to 1500. From the transom face to the housing’s leading edge, without any board. */
+            standoffMm?: number;
+            /** @description Board thickness, mm, 0 to 200. */
+            boardThicknessMm?: number;
+            /** @description Plate width, mm, 0 to 1500. */
+            plateWidthMm?: number;
+            /** @description Plate height, mm, 0 to 1500. */
+            plateHeightMm?: number;
+            /** @description Greatest speed, kn, 0 to 120. */
+            maxSpeedKn?: number;
+            /** @description Hull materials; between | in a CSV cell. */
+            hullMaterials?: ("aluminium" | "glass-fibre" | "wood" | "polyethylene" | "inflatable" | "steel" | "composite" | "other")[];
+            /** @description Least deadrise, deg, 0 to 30. */
+            deadriseMinDeg?: number;
+            /** @description Greatest deadrise, deg, 0 to 30. */
+            deadriseMaxDeg?: number;
+            /** @description Longest housing, mm, 20 to 1200. */
+            housingLengthMaxMm?: number;
+            /** @description Widest housing, mm, 10 to 600. */
+            housingWidthMaxMm?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+            values: {
+                [key: string]: components["schemas"]["SourcedValue"];
+            };
+        };
+        TrimPoint: {
+            id: string;
+            /** @description Id of the hull. */
+            hull: string;
+            /** @description Speed, kn, 0 to 100. Through the water. */
+            speedKn: number;
+            /** @description Running trim, deg, -10 to 20. Bow up is positive. */
+            trimDeg: number;
+            /** @description Scatter, deg, 0 to 10. One standard deviation of the runs. */
+            sigmaDeg?: number;
+            /** @description Runs, 1 to 1000. */
+            runs?: number;
+            /** @description Loaded mass, kg, 30 to 40000. */
+            loadedMassKg?: number;
+            /** @description Motor trim, deg, -20 to 80. 0 with the prop shaft parallel to the keel line. */
+            motorTrimDeg?: number;
+            /** @description Condition. What else mattered: chop, two aboard, full tank. */
+            condition?: string;
+            /**
+             * @description Where a value comes from, best first: measured, published, estimated, class (a class default).
+             * @enum {string}
+             */
+            basis: "measured" | "published" | "estimated" | "class";
+            source: string | null;
+            sourceDate: string | null;
+            edition: number;
+        };
+        HullTrim: {
+            trim: components["schemas"]["TrimAnswer"];
+            assumptions: components["schemas"]["Assumption"][];
+            cautions: components["schemas"]["CodedText"][];
+            engineVersion: string;
+            edition: number;
+        };
+        TrimAnswer: {
+            /** @description Running trim, bow up positive. */
+            valueDeg: number;
+            sigmaDeg: number;
+            /** @enum {string} */
+            basis: "yours" | "measured" | "blended" | "estimated" | "class";
+            flags: string[];
+        };
+        Assumption: {
+            /** @description Where the value was missing, e.g. hull.deadriseDeg or lowerUnits.0.swivelAftMm. */
+            field: string;
+            value: number | string;
+            sigma: number | null;
+            why: string;
+        };
+        CodedText: {
+            code: string;
+            text: string;
+        };
+        SearchHit: {
+            /** @enum {string} */
+            kind: "hulls" | "lower-units" | "transducers" | "mounts";
+            id: string;
+            maker: string;
+            model: string;
+            package: string | null;
+            yearFrom: number | null;
+            yearTo: number | null;
+            generic: boolean;
+            /** @description Words of the question that were read as another spelling. */
+            corrected: string[];
+        };
+        Edition: {
+            edition: number;
+            /** Format: date-time */
+            publishedAt: string;
+            /** @description Opaque id of who published. */
+            actor: string;
+            why: string | null;
+            /** @description Records it added or changed. */
+            records: number;
+        };
+        Maker: {
+            name: string;
+        };
+        TiltReply: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            trim: components["schemas"]["TrimAnswer"];
+            tilt: components["schemas"]["TiltAnswer"];
+            assumptions: components["schemas"]["Assumption"][];
+            cautions: components["schemas"]["CodedText"][];
+            engineVersion: string;
+            edition: number;
+        };
+        TiltAnswer: {
+            /** @description Tilt against the keel line that gives the wanted attitude; nose-up (heel-down) positive. */
+            neededDeg: number;
+            interval90Deg: [
+                number,
+                number
+            ] | null;
+            /** @description Tilt the answer was computed with: the given one, or the needed one. */
+            setDeg: number;
+            /** @description Attitude in the water at the set tilt. */
+            attitudeDeg: number;
+            /** @description The needed tilt on the bracket’s own scale; null without a mount on the transom. */
+            bracketSettingDeg: number | null;
+            inBracketRange: boolean | null;
+            /** @description Wedge that brings the needed tilt into range: above 0 turns the sensor nose-up; 0 where none is needed. */
+            wedgeDeg: number | null;
+            /** @description Thickness of that wedge, mm per 100 mm of base. */
+            shimMmPer100: number | null;
+        };
+        TiltQuestion: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            hull: string | components["schemas"]["InlineHull"];
+            mount?: string | components["schemas"]["InlineMount"];
+            lowerUnit?: string | components["schemas"]["InlineLowerUnit"];
+            /** @description Through the water. */
+            speedKn: number;
+            /**
+             * @description Wanted attitude in the water, nose-up positive.
+             * @default 0
+             */
+            targetDeg: number;
+            loadedMassKg?: number;
+            /** @description The boat’s own running trim, measured at this speed. */
+            measuredTrimDeg?: number;
+            measuredSigmaDeg?: number;
+            /**
+             * @description 0 with the prop shaft parallel to the keel line; swinging aft and up is positive.
+             * @default 0
+             */
+            motorTrimDeg: number;
+            /**
+             * @default fresh
+             * @enum {string}
+             */
+            water: "fresh" | "sea";
+        };
+        InlineHull: {
+            /** @description Maker. */
+            maker?: string;
+            /** @description Model. */
+            model?: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /**
+             * @description Form: flat, shallow-v, modified-v, deep-v, tri-hull, pontoon, catamaran, other.
+             * @enum {string}
+             */
+            form: "flat" | "shallow-v" | "modified-v" | "deep-v" | "tri-hull" | "pontoon" | "catamaran" | "other";
+            /** @description Length, m, 1.5 to 30. Length of the hull, without swim platform or motor. */
+            lengthM: number;
+            /** @description Beam, m, 0.5 to 8. Greatest width over all. */
+            beamM?: number;
+            /** @description Chine beam, m, 0.3 to 8. Width of the bottom between the chines, at the transom. */
+            chineBeamM?: number;
+            /** @description Deadrise, deg, 0 to 30. Angle of the bottom against level, at the transom. */
+            deadriseDeg?: number;
+            /** @description Transom angle, deg, -5 to 30. How far the top of the transom leans aft of square to the keel line. */
+            transomAngleDeg?: number;
+            /** @description Transom height, mm, 150 to 1500. From the keel to where the motor clamps, square to the keel line. */
+            transomHeightMm?: number;
+            /** @description Transom width, mm, 200 to 5000. */
+            transomWidthMm?: number;
+            /** @description Keel pad, mm, 0 to 1500. Full width of the flat at the keel; 0 where the bottom is a plain vee. */
+            keelPadMm?: number;
+            /** @description Trim tab chord, mm, 0 to 1000. */
+            tabChordMm?: number;
+            /** @description Trim tab span, 0 to 1. Span of both tabs together, as a share of the chine beam. */
+            tabSpanRatio?: number;
+            /** @description Notch, mm, 0 to 1500. How far the bottom ends ahead of the transom; 0 for none. */
+            notchMm?: number;
+            /** @description Steps, 0 to 5. */
+            steps?: number;
+            /** @description Strakes; between | in a CSV cell. */
+            strakes?: string[];
+            /**
+             * @description Material: aluminium, glass-fibre, wood, polyethylene, inflatable, steel, composite, other.
+             * @enum {string}
+             */
+            material?: "aluminium" | "glass-fibre" | "wood" | "polyethylene" | "inflatable" | "steel" | "composite" | "other";
+            /** @description Dry mass, kg, 15 to 30000. */
+            dryMassKg?: number;
+            /** @description Loaded mass, kg, 30 to 40000. As it is really run: motor, fuel, people, gear. */
+            loadedMassKg?: number;
+            /** @description Centre of gravity, ahead of the transom, m, 0.1 to 20. */
+            lcgM?: number;
+            /** @description Centre of gravity, above the keel, m, -0.5 to 4. */
+            vcgM?: number;
+            /** @description Greatest power, hp, 0 to 2000. */
+            maxPowerHp?: number;
+            /** @description Trim at rest, deg, -10 to 10. Bow up is positive. */
+            staticTrimDeg?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+            /** @description One standard deviation by field name, in that field’s unit. */
+            sigmas?: {
+                [key: string]: number;
+            };
+            trimPoints?: components["schemas"]["InlineTrimPoint"][];
+        };
+        InlineTrimPoint: {
+            /** @description Speed, kn, 0 to 100. Through the water. */
+            speedKn: number;
+            /** @description Running trim, deg, -10 to 20. Bow up is positive. */
+            trimDeg: number;
+            /** @description Scatter, deg, 0 to 10. One standard deviation of the runs. */
+            sigmaDeg?: number;
+            /** @description Runs, 1 to 1000. */
+            runs?: number;
+            /** @description Loaded mass, kg, 30 to 40000. */
+            loadedMassKg?: number;
+            /** @description Motor trim, deg, -20 to 80. 0 with the prop shaft parallel to the keel line. */
+            motorTrimDeg?: number;
+        };
+        InlineMount: {
+            /** @description Maker. */
+            maker?: string;
+            /** @description Model. */
+            model?: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /**
+             * @description Kind: transom-bracket, kick-up-bracket, transom-board, through-hull, in-hull, pole, sensor-jack, bow-motor.
+             * @enum {string}
+             */
+            kind: "transom-bracket" | "kick-up-bracket" | "transom-board" | "through-hull" | "in-hull" | "pole" | "sensor-jack" | "bow-motor";
+            /** @description Least tilt on the scale, deg, -90 to 90. */
+            tiltMinDeg?: number;
+            /** @description Greatest tilt on the scale, deg, -90 to 90. */
+            tiltMaxDeg?: number;
+            /** @description Zero of the scale, deg, -45 to 45. How far nose-up from square to the transom face the axis stands when the scale reads 0. */
+            tiltZeroDeg?: number;
+            /** @description Step of the scale, deg, 0 to 45. */
+            tiltStepDeg?: number;
+            /** @description Least roll, deg, -90 to 90. */
+            rollMinDeg?: number;
+            /** @description Greatest roll, deg, -90 to 90. */
+            rollMaxDeg?: number;
+            /** @description Least height, mm, -1000 to 1000. */
+            heightMinMm?: number;
+            /** @description Greatest height, mm, -1000 to 2000. */
+            heightMaxMm?: number;
+            /** @description Standoff, mm, 0 to 1500. From the transom face to the housing’s leading edge, without any board. */
+            standoffMm?: number;
+            /** @description Board thickness, mm, 0 to 200. */
+            boardThicknessMm?: number;
+            /** @description Plate width, mm, 0 to 1500. */
+            plateWidthMm?: number;
+            /** @description Plate height, mm, 0 to 1500. */
+            plateHeightMm?: number;
+            /** @description Greatest speed, kn, 0 to 120. */
+            maxSpeedKn?: number;
+            /** @description Hull materials; between | in a CSV cell. */
+            hullMaterials?: ("aluminium" | "glass-fibre" | "wood" | "polyethylene" | "inflatable" | "steel" | "composite" | "other")[];
+            /** @description Least deadrise, deg, 0 to 30. */
+            deadriseMinDeg?: number;
+            /** @description Greatest deadrise, deg, 0 to 30. */
+            deadriseMaxDeg?: number;
+            /** @description Longest housing, mm, 20 to 1200. */
+            housingLengthMaxMm?: number;
+            /** @description Widest housing, mm, 10 to 600. */
+            housingWidthMaxMm?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+            /** @description One standard deviation by field name, in that field’s unit. */
+            sigmas?: {
+                [key: string]: number;
+            };
+        };
+        InlineLowerUnit: {
+            /** @description Maker. */
+            maker?: string;
+            /** @description Model. */
+            model?: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /**
+             * @description Drive: outboard, sterndrive, kicker, electric.
+             * @enum {string}
+             */
+            drive: "outboard" | "sterndrive" | "kicker" | "electric";
+            /** @description Power, hp, 0.1 to 1000. */
+            powerHp: number;
+            /** @description Shaft length, mm, 200 to 1100. From the clamp to the anti-ventilation plate: 381, 508, 635 or 762 mm for 15, 20, 25 or 30 in. */
+            shaftLengthMm?: number;
+            /** @description Plate below keel, mm, -300 to 600. Sterndrive only: how far the anti-ventilation plate stands below the keel line. */
+            plateBelowKeelMm?: number;
+            /**
+             * @description Rotation: right, left, dual.
+             * @enum {string}
+             */
+            rotation?: "right" | "left" | "dual";
+            /** @description Propeller diameter, mm, 80 to 700. */
+            propDiameterMm?: number;
+            /** @description Propeller depth along the shaft, mm, 5 to 400. */
+            propAxialMm?: number;
+            /** @description Propeller aft, mm, 0 to 900. Its middle, aft of the driveshaft axis. */
+            propAftMm?: number;
+            /** @description Blade area ratio, 0.05 to 1. */
+            bladeAreaRatio?: number;
+            /** @description Torpedo diameter, mm, 20 to 400. */
+            torpedoDiameterMm?: number;
+            /** @description Torpedo length, mm, 80 to 1600. */
+            torpedoLengthMm?: number;
+            /** @description Torpedo nose forward, mm, 0 to 1000. Of the driveshaft axis. */
+            torpedoNoseForwardMm?: number;
+            /** @description Plate above shaft, mm, 30 to 600. Anti-ventilation plate above the prop-shaft line. */
+            plateAboveShaftMm?: number;
+            /** @description Plate length, mm, 50 to 1200. */
+            plateLengthMm?: number;
+            /** @description Plate width, mm, 30 to 800. */
+            plateWidthMm?: number;
+            /** @description Plate thickness, mm, 1 to 60. */
+            plateThicknessMm?: number;
+            /** @description Plate forward, mm, -300 to 800. Its leading edge, ahead of the driveshaft axis. */
+            plateForwardMm?: number;
+            /** @description Strut chord, mm, 20 to 600. */
+            strutChordMm?: number;
+            /** @description Strut thickness, mm, 8 to 250. */
+            strutThicknessMm?: number;
+            /** @description Leg chord, mm, 20 to 800. */
+            legChordMm?: number;
+            /** @description Leg thickness, mm, 8 to 400. */
+            legThicknessMm?: number;
+            /** @description Skeg depth, mm, 0 to 700. Its lower edge below the prop-shaft line. */
+            skegDepthMm?: number;
+            /** @description Skeg chord, mm, 5 to 700. */
+            skegChordMm?: number;
+            /** @description Skeg thickness, mm, 1 to 60. */
+            skegThicknessMm?: number;
+            /** @description Skeg aft, mm, -400 to 600. Its middle, aft of the driveshaft axis. */
+            skegAftMm?: number;
+            /** @description Swivel axis aft, mm, -50 to 500. Of the clamp point. */
+            swivelAftMm?: number;
+            /** @description Driveshaft aft, mm, -50 to 700. Of the clamp point. */
+            driveshaftAftMm?: number;
+            /** @description Tilt axis aft, mm, -200 to 500. Of the clamp point. */
+            tiltAxisAftMm?: number;
+            /** @description Tilt axis above, mm, -300 to 500. The clamp point. */
+            tiltAxisAboveMm?: number;
+            /** @description Trim reference, deg, -5 to 30. Transom angle at which the trim limits are stated. */
+            trimRefTransomDeg?: number;
+            /** @description Least trim, deg, -30 to 10. */
+            trimMinDeg?: number;
+            /** @description Greatest trim under power, deg, -5 to 60. */
+            trimMaxDeg?: number;
+            /** @description Full tilt, deg, 0 to 110. */
+            tiltMaxDeg?: number;
+            /** @description Greatest steering angle, deg, 0 to 180. */
+            steerMaxDeg?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+            /** @description One standard deviation by field name, in that field’s unit. */
+            sigmas?: {
+                [key: string]: number;
+            };
+        };
+        ClearanceReply: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            clearance: components["schemas"]["ClearanceAnswer"];
+            assumptions: components["schemas"]["Assumption"][];
+            cautions: components["schemas"]["CodedText"][];
+            engineVersion: string;
+            edition: number;
+        };
+        ClearanceAnswer: {
+            port: components["schemas"]["SideAnswer"];
+            starboard: components["schemas"]["SideAnswer"];
+            /** @description Tilts around the set one at which both sides are clear. */
+            tiltWindowDeg: [
+                number,
+                number
+            ] | null;
+            nearestClearTiltDeg: number | null;
+        };
+        SideAnswer: {
+            /** @enum {string} */
+            verdict: "clear" | "shaded" | "blocked";
+            clearShare: number;
+            probabilityClear: number | null;
+            sectors: components["schemas"]["Sector"][];
+            /** @description Smallest distance of the beam to any part but the hull within 5 m; 0 where something is hit; null where nothing is near. */
+            leastClearanceMm: number | null;
+            /** @description Clearance below which the edge of the beam is still disturbed, at the nearest part. */
+            diffractionMarginMm: number | null;
+        } | null;
+        Sector: {
+            /** @description Depression in the sensor frame. */
+            fromDeg: number;
+            toDeg: number;
+            /** @description Share of the side’s whole pattern weight that lies in this sector. */
+            share: number;
+            /** @enum {string} */
+            kind: "hidden" | "thinned";
+            by: {
+                /** @description Place of the engine in lowerUnits, from 0; null for an obstacle or the hull. */
+                unit: number | null;
+                /** @enum {string} */
+                part: "torpedo" | "strut" | "leg" | "plate" | "skeg" | "propeller" | "obstacle" | "hull";
+                /** @description Label of the obstacle. */
+                label?: string;
+            };
+        };
+        ClearanceQuestion: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            hull: string | components["schemas"]["InlineHull"];
+            lowerUnit?: string | components["schemas"]["InlineLowerUnit"];
+            transducer: string | components["schemas"]["InlineTransducer"];
+            mount?: string | components["schemas"]["InlineMount"];
+            obstacles?: components["schemas"]["FitObstacle"][];
+            /** @description Of the sensor off the centreline, starboard positive. */
+            offsetMm: number;
+            /** @description Lower leading edge below the local bottom. */
+            dropMm: number;
+            /** @description Transom face (or board) to leading edge; the mount’s, else 25. */
+            standoffMm?: number;
+            /**
+             * @description Thickness of a transom board; added to the standoff.
+             * @default 0
+             */
+            boardMm: number;
+            /** @description Ahead of the transom; for through-hull, in-hull, pole and bow mounts. */
+            forwardMm?: number;
+            /** @description Bottom at the sensor below the keel line; needed on pontoons, catamarans and stepped hulls, where no vee tells it. */
+            localBottomMm?: number;
+            /** @default 0 */
+            rollDeg: number;
+            /** @default 0 */
+            yawDeg: number;
+            /**
+             * @description Set tilt against the keel line, nose-up positive.
+             * @default 0
+             */
+            tiltDeg: number;
+            /**
+             * @description How far a jack plate or bracket sets the engine aft.
+             * @default 0
+             */
+            setbackMm: number;
+            /**
+             * @description How far the engine is raised along the transom.
+             * @default 0
+             */
+            raiseMm: number;
+            /**
+             * @description 0 with the prop shaft parallel to the keel line; swinging aft and up is positive.
+             * @default 0
+             */
+            motorTrimDeg: number;
+            /**
+             * @description Positive moves the nose of the lower unit to starboard.
+             * @default 0
+             */
+            steerDeg: number;
+            /**
+             * @description Off the centreline, starboard positive.
+             * @default 0
+             */
+            engineOffsetMm: number;
+            /** @enum {string} */
+            rotation?: "right" | "left" | "dual";
+            /**
+             * @default both
+             * @enum {string}
+             */
+            wanted: "both" | "port" | "starboard";
+        };
+        InlineTransducer: {
+            /** @description Maker. */
+            maker?: string;
+            /** @description Model. */
+            model?: string;
+            /** @description Package. Trim level or equipment package, where it changes the shape. */
+            package?: string;
+            /** @description First model year, 1900 to 2100. */
+            yearFrom?: number;
+            /** @description Last model year, 1900 to 2100. */
+            yearTo?: number;
+            /** @description Housing length, mm, 30 to 900. Along the boat. */
+            housingLengthMm?: number;
+            /** @description Housing width, mm, 10 to 400. */
+            housingWidthMm?: number;
+            /** @description Housing height, mm, 5 to 300. */
+            housingHeightMm?: number;
+            /** @description Elements; between | in a CSV cell. */
+            kinds: ("side" | "down" | "cone")[];
+            /** @description Side frequency, khz, 20 to 3000. */
+            sideFrequencyKhz?: number;
+            /** @description Side axis depression, deg, 0 to 90. How far the middle of the side beam points below level. */
+            sideDepressionDeg?: number;
+            /** @description Side beam, vertical width, deg, 1 to 170. */
+            sideVerticalBeamDeg?: number;
+            /** @description Side beam, along the track, deg, 0.05 to 20. */
+            sideAlongBeamDeg?: number;
+            /** @description Side aperture, mm, 10 to 900. Length of the radiating face. */
+            sideApertureMm?: number;
+            /** @description Beam level, db, -20 to -1. Level at which the widths are stated; −3 where blank. */
+            beamLevelDb?: number;
+            /**
+             * @description Beam level, way: one, two.
+             * @enum {string}
+             */
+            beamLevelWay?: "one" | "two";
+            /** @description Down frequency, khz, 20 to 3000. */
+            downFrequencyKhz?: number;
+            /** @description Down beam, along, deg, 0.05 to 90. */
+            downAlongBeamDeg?: number;
+            /** @description Down beam, across, deg, 0.05 to 170. */
+            downAcrossBeamDeg?: number;
+            /** @description Cone width, deg, 1 to 120. */
+            coneBeamDeg?: number;
+            /** @description Mounts it can use; between | in a CSV cell. */
+            mountKinds?: ("transom-bracket" | "kick-up-bracket" | "transom-board" | "through-hull" | "in-hull" | "pole" | "sensor-jack" | "bow-motor")[];
+            /** @description Greatest speed, kn, 0 to 120. */
+            maxSpeedKn?: number;
+            /** @description Other spellings; between | in a CSV cell. */
+            aliases?: string[];
+            /** @description Notes. */
+            notes?: string;
+            /** @description One standard deviation by field name, in that field’s unit. */
+            sigmas?: {
+                [key: string]: number;
+            };
+        };
+        /** @description A box in the boat frame, by its middle: +x forward, +y starboard, +z down. */
+        FitObstacle: {
+            label: string;
+            xMm: number;
+            yMm: number;
+            zMm: number;
+            lengthMm: number;
+            widthMm: number;
+            heightMm: number;
+        };
+        FitAnswer: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            /** @enum {string} */
+            verdict: "fits" | "fits-with-care" | "does-not-fit" | "cannot-tell";
+            reasons: components["schemas"]["CodedText"][];
+            action: {
+                /** @enum {string} */
+                code: "leave" | "re-tilt" | "trim-motor-up" | "move" | "add-wedge" | "measure-first" | "choose-another-mount";
+                text: string;
+            };
+            compatibility: components["schemas"]["RuleOutcome"][];
+            trim: components["schemas"]["TrimAnswer"];
+            tilt: components["schemas"]["TiltAnswer"];
+            clearance: components["schemas"]["ClearanceAnswer"];
+            flow: components["schemas"]["RuleOutcome"][];
+            states: {
+                label: string;
+                trim: components["schemas"]["TrimAnswer"];
+                attitudeDeg: number;
+                clearance: components["schemas"]["ClearanceAnswer"];
+            }[];
+            dominantInput: {
+                name: string;
+                shareOfVariance: number;
+            } | null;
+            nextMeasurement: {
+                name: string;
+                how: string;
+                interval90DegAfter: [
+                    number,
+                    number
+                ];
+            } | null;
+            assumptions: components["schemas"]["Assumption"][];
+            cautions: components["schemas"]["CodedText"][];
+            engineVersion: string;
+            edition: number;
+            /** @description SHA-256 of what the answer says; equal digests mean nothing changed. */
+            answerDigest: string;
+        };
+        RuleOutcome: {
+            rule: string;
+            /** @enum {string} */
+            outcome: "ok" | "caution" | "no" | "unknown";
+            text: string;
+            basis: ("measured" | "published" | "estimated" | "class") | string;
+        };
+        FitQuestion: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            hull: string | components["schemas"]["InlineHull"];
+            lowerUnits: components["schemas"]["FitEngine"][];
+            transducer: string | components["schemas"]["InlineTransducer"];
+            mount?: string | components["schemas"]["InlineMount"];
+            placement: {
+                /** @description Of the sensor off the centreline, starboard positive. */
+                offsetMm: number;
+                /** @description Lower leading edge below the local bottom. */
+                dropMm: number;
+                /** @description Transom face (or board) to leading edge; the mount’s, else 25. */
+                standoffMm?: number;
+                /**
+                 * @description Thickness of a transom board; added to the standoff.
+                 * @default 0
+                 */
+                boardMm: number;
+                /** @description Ahead of the transom; for through-hull, in-hull, pole and bow mounts. */
+                forwardMm?: number;
+                /** @description Bottom at the sensor below the keel line; needed on pontoons, catamarans and stepped hulls, where no vee tells it. */
+                localBottomMm?: number;
+                /** @default 0 */
+                rollDeg: number;
+                /** @default 0 */
+                yawDeg: number;
+                /** @description Set tilt against the keel line, nose-up positive; left out, the needed one. */
+                tiltDeg?: number;
+                /** @description Set tilt on the bracket’s own scale, in place of tiltDeg. */
+                bracketSettingDeg?: number;
+            };
+            running: {
+                /** @description Through the water. */
+                speedKn: number;
+                loadedMassKg?: number;
+                /** @description The boat’s own running trim, measured at this speed. */
+                measuredTrimDeg?: number;
+                measuredSigmaDeg?: number;
+                /**
+                 * @default fresh
+                 * @enum {string}
+                 */
+                water: "fresh" | "sea";
+            };
+            alsoAt?: {
+                label: string;
+                speedKn: number;
+                motorTrimDeg?: number;
+            }[];
+            obstacles?: components["schemas"]["FitObstacle"][];
+            /**
+             * @default both
+             * @enum {string}
+             */
+            wanted: "both" | "port" | "starboard";
+            target: {
+                attitudeDeg: number;
+            };
+            /**
+             * @description Single questions default to sampled, batch lines to none.
+             * @enum {string}
+             */
+            uncertainty?: "sampled" | "none";
+        };
+        FitEngine: {
+            lowerUnit: string | components["schemas"]["InlineLowerUnit"];
+            /**
+             * @description Off the centreline, starboard positive.
+             * @default 0
+             */
+            offsetMm: number;
+            /**
+             * @description How far a jack plate or bracket sets the engine aft.
+             * @default 0
+             */
+            setbackMm: number;
+            /**
+             * @description How far the engine is raised along the transom.
+             * @default 0
+             */
+            raiseMm: number;
+            /**
+             * @description 0 with the prop shaft parallel to the keel line; swinging aft and up is positive.
+             * @default 0
+             */
+            motorTrimDeg: number;
+            /**
+             * @description Positive moves the nose of the lower unit to starboard.
+             * @default 0
+             */
+            steerDeg: number;
+            /** @enum {string} */
+            rotation?: "right" | "left" | "dual";
+        };
+        Session: {
+            /** @description Null for a visitor. */
+            account: {
+                id: string;
+                email: string;
+                name: string;
+                roles: components["schemas"]["Role"][];
+                /** Format: date-time */
+                createdAt: string;
+                /** @description Null until chosen. */
+                units: {
+                    /** @enum {string} */
+                    length: "mm" | "in";
+                    /** @enum {string} */
+                    speed: "kn" | "km/h" | "mph";
+                    /** @enum {string} */
+                    mass: "kg" | "lb";
+                } | null;
+                /** @description Signing in needs a code as well. */
+                secondFactor: boolean;
+                /** @description This site asks staff for one; until it is set up, staff work is refused. */
+                secondFactorDemanded: boolean;
+            } | null;
+            /** Format: date-time */
+            expiresAt: string | null;
+        };
         /** @enum {string} */
-        part: 'torpedo' | 'strut' | 'leg' | 'plate' | 'skeg' | 'propeller' | 'obstacle' | 'hull';
-        /** @description Label of the obstacle. */
-        label?: string;
-      };
-    };
-    ClearanceQuestion: {
-      /** @description Echoed in the answer. */
-      ref?: string;
-      hull: string | components['schemas']['InlineHull'];
-      lowerUnit?: string | components['schemas']['InlineLowerUnit'];
-      transducer: string | components['schemas']['InlineTransducer'];
-      mount?: string | components['schemas']['InlineMount'];
-      obstacles?: components['schemas']['FitObstacle'][];
-      /** @description Of the sensor off the centreline, starboard positive. */
-      offsetMm: number;
-      /** @description Lower leading edge below the local bottom. */
-      dropMm: number;
-      /** @description Transom face (or board) to leading edge; the mount’s, else 25. */
-      standoffMm?: number;
-      /**
-       * @description Thickness of a transom board; added to the standoff.
-       * @default 0
-       */
-      boardMm: number;
-      /** @description Ahead of the transom; for through-hull, in-hull, pole and bow mounts. */
-      forwardMm?: number;
-      /** @description Bottom at the sensor below the keel line; needed on pontoons, catamarans and stepped hulls, where no vee tells it. */
-      localBottomMm?: number;
-      /** @default 0 */
-      rollDeg: number;
-      /** @default 0 */
-      yawDeg: number;
-      /**
-       * @description Set tilt against the keel line, nose-up positive.
-       * @default 0
-       */
-      tiltDeg: number;
-      /**
-       * @description How far a jack plate or bracket sets the engine aft.
-       * @default 0
-       */
-      setbackMm: number;
-      /**
-       * @description How far the engine is raised along the transom.
-       * @default 0
-       */
-      raiseMm: number;
-      /**
-       * @description 0 with the prop shaft parallel to the keel line; swinging aft and up is positive.
-       * @default 0
-       */
-      motorTrimDeg: number;
-      /**
-       * @description Positive moves the nose of the lower unit to starboard.
-       * @default 0
-       */
-      steerDeg: number;
-      /**
-       * @description Off the centreline, starboard positive.
-       * @default 0
-       */
-      engineOffsetMm: number;
-      /** @enum {string} */
-      rotation?: 'right' | 'left' | 'dual';
-      /**
-       * @default both
-       * @enum {string}
-       */
-      wanted: 'both' | 'port' | 'starboard';
-    };
-    InlineTransducer: {
-      /** @description Maker. */
-      maker?: string;
-      /** @description Model. */
-      model?: string;
-      /** @description Package. Trim level or equipment package, where it changes the shape. */
-      package?: string;
-      /** @description First model year, 1900 to 2100. */
-      yearFrom?: number;
-      /** @description Last model year, 1900 to 2100. */
-      yearTo?: number;
-      /** @description Housing length, mm, 30 to 900. Along the boat. */
-      housingLengthMm?: number;
-      /** @description Housing width, mm, 10 to 400. */
-      housingWidthMm?: number;
-      /** @description Housing height, mm, 5 to 300. */
-      housingHeightMm?: number;
-      /** @description Elements; between | in a CSV cell. */
-      kinds: ('side' | 'down' | 'cone')[];
-      /** @description Side frequency, khz, 20 to 3000. */
-      sideFrequencyKhz?: number;
-      /** @description Side axis depression, deg, 0 to 90. How far the middle of the side beam points below level. */
-      sideDepressionDeg?: number;
-      /** @description Side beam, vertical width, deg, 1 to 170. */
-      sideVerticalBeamDeg?: number;
-      /** @description Side beam, along the track, deg, 0.05 to 20. */
-      sideAlongBeamDeg?: number;
-      /** @description Side aperture, mm, 10 to 900. Length of the radiating face. */
-      sideApertureMm?: number;
-      /** @description Beam level, db, -20 to -1. Level at which the widths are stated; −3 where blank. */
-      beamLevelDb?: number;
-      /**
-       * @description Beam level, way: one, two.
-       * @enum {string}
-       */
-      beamLevelWay?: 'one' | 'two';
-      /** @description Down frequency, khz, 20 to 3000. */
-      downFrequencyKhz?: number;
-      /** @description Down beam, along, deg, 0.05 to 90. */
-      downAlongBeamDeg?: number;
-      /** @description Down beam, across, deg, 0.05 to 170. */
-      downAcrossBeamDeg?: number;
-      /** @description Cone width, deg, 1 to 120. */
-      coneBeamDeg?: number;
-      /** @description Mounts it can use; between | in a CSV cell. */
-      mountKinds?: (
-        | 'transom-bracket'
-        | 'kick-up-bracket'
-        | 'transom-board'
-        | 'through-hull'
-        | 'in-hull'
-        | 'pole'
-        | 'sensor-jack'
-        | 'bow-motor'
-      )[];
-      /** @description Greatest speed, kn, 0 to 120. */
-      maxSpeedKn?: number;
-      /** @description Other spellings; between | in a CSV cell. */
-      aliases?: string[];
-      /** @description Notes. */
-      notes?: string;
-      /** @description One standard deviation by field name, in that field’s unit. */
-      sigmas?: {
-        [key: string]: number;
-      };
-    };
-    /** @description A box in the boat frame, by its middle: +x forward, +y starboard, +z down. */
-    FitObstacle: {
-      label: string;
-      xMm: number;
-      yMm: number;
-      zMm: number;
-      lengthMm: number;
-      widthMm: number;
-      heightMm: number;
-    };
-    FitAnswer: {
-      /** @description Echoed in the answer. */
-      ref?: string;
-      /** @enum {string} */
-      verdict: 'fits' | 'fits-with-care' | 'does-not-fit' | 'cannot-tell';
-      reasons: components['schemas']['CodedText'][];
-      action: {
+        Role: "customer" | "integrator" | "steward" | "admin";
+        SignIn: {
+            /** Format: email */
+            email: string;
+            password: string;
+        };
+        SignUp: {
+            /** Format: email */
+            email: string;
+            password: string;
+            name: string;
+            /** @default false */
+            integrator: boolean;
+        };
+        Account: {
+            id: string;
+            email: string;
+            name: string;
+            roles: components["schemas"]["Role"][];
+            /** Format: date-time */
+            createdAt: string;
+            /** @description Null until chosen. */
+            units: {
+                /** @enum {string} */
+                length: "mm" | "in";
+                /** @enum {string} */
+                speed: "kn" | "km/h" | "mph";
+                /** @enum {string} */
+                mass: "kg" | "lb";
+            } | null;
+            /** @description Signing in needs a code as well. */
+            secondFactor: boolean;
+            /** @description This site asks staff for one; until it is set up, staff work is refused. */
+            secondFactorDemanded: boolean;
+        };
+        Key: {
+            id: string;
+            name: string;
+            /** @description How the key begins; the rest is shown once, at its creation. */
+            prefix: string;
+            scopes: components["schemas"]["Scope"][];
+            kind: components["schemas"]["KeyKind"];
+            origins: string[];
+            /** Format: date-time */
+            expiresAt: string | null;
+            /**
+             * Format: date-time
+             * @description Until then the secret before the last rotation works too.
+             */
+            previousUntil: string | null;
+            /** Format: date-time */
+            createdAt: string;
+            /** Format: date-time */
+            lastUsedAt: string | null;
+            /** Format: date-time */
+            revokedAt: string | null;
+        };
         /** @enum {string} */
-        code: 'leave' | 're-tilt' | 'trim-motor-up' | 'move' | 'add-wedge' | 'measure-first' | 'choose-another-mount';
-        text: string;
-      };
-      compatibility: components['schemas']['RuleOutcome'][];
-      trim: components['schemas']['TrimAnswer'];
-      tilt: components['schemas']['TiltAnswer'];
-      clearance: components['schemas']['ClearanceAnswer'];
-      flow: components['schemas']['RuleOutcome'][];
-      states: {
-        label: string;
-        trim: components['schemas']['TrimAnswer'];
-        attitudeDeg: number;
-        clearance: components['schemas']['ClearanceAnswer'];
-      }[];
-      dominantInput: {
-        name: string;
-        shareOfVariance: number;
-      } | null;
-      nextMeasurement: {
-        name: string;
-        how: string;
-        interval90DegAfter: [number, number];
-      } | null;
-      assumptions: components['schemas']['Assumption'][];
-      cautions: components['schemas']['CodedText'][];
-      engineVersion: string;
-      edition: number;
-      /** @description SHA-256 of what the answer says; equal digests mean nothing changed. */
-      answerDigest: string;
-    };
-    RuleOutcome: {
-      rule: string;
-      /** @enum {string} */
-      outcome: 'ok' | 'caution' | 'no' | 'unknown';
-      text: string;
-      basis: ('measured' | 'published' | 'estimated' | 'class') | string;
-    };
-    FitQuestion: {
-      /** @description Echoed in the answer. */
-      ref?: string;
-      hull: string | components['schemas']['InlineHull'];
-      lowerUnits: components['schemas']['FitEngine'][];
-      transducer: string | components['schemas']['InlineTransducer'];
-      mount?: string | components['schemas']['InlineMount'];
-      placement: {
-        /** @description Of the sensor off the centreline, starboard positive. */
-        offsetMm: number;
-        /** @description Lower leading edge below the local bottom. */
-        dropMm: number;
-        /** @description Transom face (or board) to leading edge; the mount’s, else 25. */
-        standoffMm?: number;
+        Scope: "catalog:read" | "fit:compute" | "boats:write" | "webhooks:manage";
         /**
-         * @description Thickness of a transom board; added to the standoff.
-         * @default 0
-         */
-        boardMm: number;
-        /** @description Ahead of the transom; for through-hull, in-hull, pole and bow mounts. */
-        forwardMm?: number;
-        /** @description Bottom at the sensor below the keel line; needed on pontoons, catamarans and stepped hulls, where no vee tells it. */
-        localBottomMm?: number;
-        /** @default 0 */
-        rollDeg: number;
-        /** @default 0 */
-        yawDeg: number;
-        /** @description Set tilt against the keel line, nose-up positive; left out, the needed one. */
-        tiltDeg?: number;
-        /** @description Set tilt on the bracket’s own scale, in place of tiltDeg. */
-        bracketSettingDeg?: number;
-      };
-      running: {
-        /** @description Through the water. */
-        speedKn: number;
-        loadedMassKg?: number;
-        /** @description The boat’s own running trim, measured at this speed. */
-        measuredTrimDeg?: number;
-        measuredSigmaDeg?: number;
-        /**
-         * @default fresh
+         * @description A server key is a secret and refuses browsers; a browser key can be read by anyone and works from its origins alone.
          * @enum {string}
          */
-        water: 'fresh' | 'sea';
-      };
-      alsoAt?: {
-        label: string;
-        speedKn: number;
-        motorTrimDeg?: number;
-      }[];
-      obstacles?: components['schemas']['FitObstacle'][];
-      /**
-       * @default both
-       * @enum {string}
-       */
-      wanted: 'both' | 'port' | 'starboard';
-      target: {
-        attitudeDeg: number;
-      };
-      /**
-       * @description Single questions default to sampled, batch lines to none.
-       * @enum {string}
-       */
-      uncertainty?: 'sampled' | 'none';
+        KeyKind: "server" | "browser";
+        CreatedKey: {
+            id: string;
+            name: string;
+            /** @description How the key begins; the rest is shown once, at its creation. */
+            prefix: string;
+            scopes: components["schemas"]["Scope"][];
+            kind: components["schemas"]["KeyKind"];
+            origins: string[];
+            /** Format: date-time */
+            expiresAt: string | null;
+            /**
+             * Format: date-time
+             * @description Until then the secret before the last rotation works too.
+             */
+            previousUntil: string | null;
+            /** Format: date-time */
+            createdAt: string;
+            /** Format: date-time */
+            lastUsedAt: string | null;
+            /** Format: date-time */
+            revokedAt: string | null;
+            /** @description Shown once. */
+            key: string;
+        };
+        NewKey: {
+            name: string;
+            scopes: components["schemas"]["Scope"][];
+            kind?: components["schemas"]["KeyKind"];
+            /**
+             * @description Of the pages that may use a browser key.
+             * @default []
+             */
+            origins: string[];
+            /**
+             * Format: date-time
+             * @description When it stops working by itself; null for never.
+             * @default null
+             */
+            expiresAt: string | null;
+        };
+        Rotation: {
+            /**
+             * @description How long the old secret works beside the new one.
+             * @default 24
+             */
+            overlapHours: number;
+        };
+        DayOfUse: {
+            key: string;
+            /** @description A day by UTC, 2026-05-31. */
+            day: string;
+            requests: number;
+            units: number;
+            /** @description Of the requests, those answered 429. */
+            refused: number;
+        };
+        Limit: {
+            caller: components["schemas"]["LimitedCaller"];
+            unitsPerMinute: number;
+            unitsPerDay: number | null;
+            /**
+             * Format: date-time
+             * @description Null while it is as configured.
+             */
+            changedAt: string | null;
+            changedBy: string | null;
+        };
+        /**
+         * @description anonymous: nobody signed in, by address. page: a page of this very site in a browser. account: signed in. key: a program with an API key.
+         * @enum {string}
+         */
+        LimitedCaller: "anonymous" | "page" | "account" | "key";
+        LimitSetting: {
+            unitsPerMinute: number;
+            /**
+             * @description Kept for keys only; null for none.
+             * @default null
+             */
+            unitsPerDay: number | null;
+        };
+        Boat: {
+            id: string;
+            name: string;
+            story: string | null;
+            hull: string | null;
+            question: components["schemas"]["FitQuestion"];
+        };
+        CreatedImport: {
+            id: string;
+            /** @enum {string} */
+            status: "uploaded" | "mapped" | "checking" | "checked" | "publishing" | "published" | "discarded" | "failed";
+        };
+        /** @enum {string} */
+        Table: "hulls" | "lower-units" | "transducers" | "mounts" | "trim-points";
+        Import: {
+            id: string;
+            table: components["schemas"]["Table"];
+            /** @enum {string} */
+            status: "uploaded" | "mapped" | "checking" | "checked" | "publishing" | "published" | "discarded" | "failed";
+            fileName: string;
+            bytes: number;
+            sha256: string;
+            /** @description Id of an earlier import of the very same file. */
+            sameFileAs: string | null;
+            encoding: string | null;
+            delimiter: string | null;
+            rows: number | null;
+            checkedRows: number;
+            /** @description Null until the check has ended. */
+            counts: {
+                new: number;
+                changed: number;
+                unchanged: number;
+                duplicate: number;
+                conflict: number;
+                error: number;
+            } | null;
+            /** @description Row of the file that holds the header. */
+            headerRow: number;
+            /** @description The header is in words of its own: map its columns before the check. */
+            needsMapping: boolean;
+            /** @description Headers that name no column of the table; their cells are left out. */
+            unknownColumns: string[];
+            edition: number | null;
+            problem: {
+                code: string;
+                message: string;
+            } | null;
+            /** Format: date-time */
+            createdAt: string;
+            createdBy: string;
+        };
+        ImportRow: {
+            /** @description Row number as a spreadsheet counts it. */
+            n: number;
+            fate: components["schemas"]["Fate"];
+            /** @description What the row is about, e.g. maker and model. */
+            name: string;
+            /** @description Id of the record it matches. */
+            record: string | null;
+            errors: components["schemas"]["CellProblem"][];
+            cautions: components["schemas"]["CellProblem"][];
+            changes: components["schemas"]["FieldChange"][];
+            /** @description The file’s own cells by its own headers. */
+            cells: {
+                [key: string]: string;
+            };
+            /** @description Cells mended in place, by canonical column. */
+            edits: {
+                [key: string]: string;
+            };
+            /**
+             * @description `skip` leaves the row out; `accept` ticks its cautions, which counts where publishing holds rows with cautions.
+             * @enum {string|null}
+             */
+            decision: "accept" | "skip" | null;
+            /**
+             * @description How its conflict was decided.
+             * @enum {string|null}
+             */
+            resolution: "catalog" | "row" | null;
+        };
+        /**
+         * @description What publishing would make of a row.
+         * @enum {string}
+         */
+        Fate: "new" | "changed" | "unchanged" | "duplicate" | "conflict" | "error";
+        CellProblem: {
+            column: string;
+            value: string;
+            code: string;
+            message: string;
+        };
+        PublishedEdition: {
+            edition: number;
+        };
+        PublishOrder: {
+            why?: string;
+            /** @default false */
+            holdCautions: boolean;
+        };
     };
-    FitEngine: {
-      lowerUnit: string | components['schemas']['InlineLowerUnit'];
-      /**
-       * @description Off the centreline, starboard positive.
-       * @default 0
-       */
-      offsetMm: number;
-      /**
-       * @description How far a jack plate or bracket sets the engine aft.
-       * @default 0
-       */
-      setbackMm: number;
-      /**
-       * @description How far the engine is raised along the transom.
-       * @default 0
-       */
-      raiseMm: number;
-      /**
-       * @description 0 with the prop shaft parallel to the keel line; swinging aft and up is positive.
-       * @default 0
-       */
-      motorTrimDeg: number;
-      /**
-       * @description Positive moves the nose of the lower unit to starboard.
-       * @default 0
-       */
-      steerDeg: number;
-      /** @enum {string} */
-      rotation?: 'right' | 'left' | 'dual';
-    };
-    Session: {
-      /** @description Null for a visitor. */
-      account: {
-        id: string;
-        email: string;
-        name: string;
-        roles: components['schemas']['Role'][];
-        /** Format: date-time */
-        createdAt: string;
-      } | null;
-      /** Format: date-time */
-      expiresAt: string | null;
-    };
-    /** @enum {string} */
-    Role: 'customer' | 'integrator' | 'steward' | 'admin';
-    SignIn: {
-      /** Format: email */
-      email: string;
-      password: string;
-    };
-    SignUp: {
-      /** Format: email */
-      email: string;
-      password: string;
-      name: string;
-      /** @default false */
-      integrator: boolean;
-    };
-    Account: {
-      id: string;
-      email: string;
-      name: string;
-      roles: components['schemas']['Role'][];
-      /** Format: date-time */
-      createdAt: string;
-    };
-    Key: {
-      id: string;
-      name: string;
-      /** @description How the key begins; the rest is shown once, at its creation. */
-      prefix: string;
-      scopes: components['schemas']['Scope'][];
-      /** Format: date-time */
-      createdAt: string;
-      /** Format: date-time */
-      lastUsedAt: string | null;
-      /** Format: date-time */
-      revokedAt: string | null;
-    };
-    /** @enum {string} */
-    Scope: 'catalog:read' | 'fit:compute' | 'boats:write' | 'webhooks:manage';
-    CreatedKey: {
-      id: string;
-      name: string;
-      /** @description How the key begins; the rest is shown once, at its creation. */
-      prefix: string;
-      scopes: components['schemas']['Scope'][];
-      /** Format: date-time */
-      createdAt: string;
-      /** Format: date-time */
-      lastUsedAt: string | null;
-      /** Format: date-time */
-      revokedAt: string | null;
-      /** @description Shown once. */
-      key: string;
-    };
-    NewKey: {
-      name: string;
-      scopes: components['schemas']['Scope'][];
-    };
-    Boat: {
-      id: string;
-      name: string;
-      story: string | null;
-      hull: string | null;
-      question: components['schemas']['FitQuestion'];
-    };
-    CreatedImport: {
-      id: string;
-      /** @enum {string} */
-      status: 'uploaded' | 'mapped' | 'checking' | 'checked' | 'publishing' | 'published' | 'discarded' | 'failed';
-    };
-    /** @enum {string} */
-    Table: 'hulls' | 'lower-units' | 'transducers' | 'mounts' | 'trim-points';
-    Import: {
-      id: string;
-      table: components['schemas']['Table'];
-      /** @enum {string} */
-      status: 'uploaded' | 'mapped' | 'checking' | 'checked' | 'publishing' | 'published' | 'discarded' | 'failed';
-      fileName: string;
-      bytes: number;
-      sha256: string;
-      /** @description Id of an earlier import of the very same file. */
-      sameFileAs: string | null;
-      encoding: string | null;
-      delimiter: string | null;
-      rows: number | null;
-      checkedRows: number;
-      /** @description Null until the check has ended. */
-      counts: {
-        new: number;
-        changed: number;
-        unchanged: number;
-        duplicate: number;
-        conflict: number;
-        error: number;
-      } | null;
-      /** @description Headers that name no column of the table; their cells are left out. */
-      unknownColumns: string[];
-      edition: number | null;
-      problem: {
-        code: string;
-        message: string;
-      } | null;
-      /** Format: date-time */
-      createdAt: string;
-      createdBy: string;
-    };
-    ImportRow: {
-      /** @description Row number as a spreadsheet counts it. */
-      n: number;
-      fate: components['schemas']['Fate'];
-      /** @description What the row is about, e.g. maker and model. */
-      name: string;
-      /** @description Id of the record it matches. */
-      record: string | null;
-      errors: components['schemas']['CellProblem'][];
-      cautions: components['schemas']['CellProblem'][];
-      changes: components['schemas']['FieldChange'][];
-      cells: {
-        [key: string]: string;
-      };
-    };
-    /**
-     * @description What publishing would make of a row.
-     * @enum {string}
-     */
-    Fate: 'new' | 'changed' | 'unchanged' | 'duplicate' | 'conflict' | 'error';
-    CellProblem: {
-      column: string;
-      value: string;
-      code: string;
-      message: string;
-    };
-    PublishedEdition: {
-      edition: number;
-    };
-    PublishOrder: {
-      why?: string;
-      /** @default false */
-      holdCautions: boolean;
-    };
-  };
-  responses: never;
-  parameters: never;
-  requestBodies: never;
-  headers: never;
-  pathItems: never;
+    responses: never;
+    parameters: never;
+    requestBodies: never;
+    headers: never;
+    pathItems: never;
 }
 export type $defs = Record<string, never>;
 export interface operations {
-  listHulls: {
-    parameters: {
-      query?: {
-        /** @description Part of maker, model, package or another spelling; slips allowed. */
-        q?: string;
-        maker?: string;
-        /** @description Built in that model year. */
-        year?: number;
-        /** @description Only the generic parts, or none of them. */
-        generic?: boolean;
-        /** @description Rows a page, at most 200. */
-        limit?: number;
-        /** @description `next` of the page before. */
-        cursor?: string;
-        form?: 'flat' | 'shallow-v' | 'modified-v' | 'deep-v' | 'tri-hull' | 'pontoon' | 'catamaran' | 'other';
-        lengthMinM?: number;
-        lengthMaxM?: number;
-        deadriseMinDeg?: number;
-        deadriseMaxDeg?: number;
-      };
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description A page of hulls. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Hull'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `stale-edition`: The catalog has changed meanwhile. */
-      409: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getHull: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The hull’s sheet. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['HullSheet'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listHullRevisions: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description Its history. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Revision'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listLowerUnits: {
-    parameters: {
-      query?: {
-        /** @description Part of maker, model, package or another spelling; slips allowed. */
-        q?: string;
-        maker?: string;
-        /** @description Built in that model year. */
-        year?: number;
-        /** @description Only the generic parts, or none of them. */
-        generic?: boolean;
-        /** @description Rows a page, at most 200. */
-        limit?: number;
-        /** @description `next` of the page before. */
-        cursor?: string;
-      };
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description A page of lower units. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['LowerUnit'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `stale-edition`: The catalog has changed meanwhile. */
-      409: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getLowerUnit: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The lower unit’s sheet. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['LowerUnitSheet'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listLowerUnitRevisions: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description Its history. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Revision'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listTransducers: {
-    parameters: {
-      query?: {
-        /** @description Part of maker, model, package or another spelling; slips allowed. */
-        q?: string;
-        maker?: string;
-        /** @description Built in that model year. */
-        year?: number;
-        /** @description Only the generic parts, or none of them. */
-        generic?: boolean;
-        /** @description Rows a page, at most 200. */
-        limit?: number;
-        /** @description `next` of the page before. */
-        cursor?: string;
-      };
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description A page of transducers. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Transducer'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `stale-edition`: The catalog has changed meanwhile. */
-      409: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getTransducer: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The transducer’s sheet. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['TransducerSheet'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listTransducerRevisions: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description Its history. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Revision'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listMounts: {
-    parameters: {
-      query?: {
-        /** @description Part of maker, model, package or another spelling; slips allowed. */
-        q?: string;
-        maker?: string;
-        /** @description Built in that model year. */
-        year?: number;
-        /** @description Only the generic parts, or none of them. */
-        generic?: boolean;
-        /** @description Rows a page, at most 200. */
-        limit?: number;
-        /** @description `next` of the page before. */
-        cursor?: string;
-      };
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description A page of mounts. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Mount'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `stale-edition`: The catalog has changed meanwhile. */
-      409: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getMount: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The mount’s sheet. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['MountSheet'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listMountRevisions: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description Its history. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Revision'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listTrimPoints: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description Its points. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['TrimPoint'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getHullTrim: {
-    parameters: {
-      query: {
-        /** @description Through the water. */
-        speedKn: number;
-        loadedMassKg?: number;
-      };
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The trim with its basis and spread. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['HullTrim'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  search: {
-    parameters: {
-      query: {
-        q: string;
-        limit?: number;
-      };
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The findings. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['SearchHit'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listEditions: {
-    parameters: {
-      query?: {
-        /** @description Rows a page, at most 200. */
-        limit?: number;
-        /** @description `next` of the page before. */
-        cursor?: string;
-      };
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description A page of editions. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Edition'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `stale-edition`: The catalog has changed meanwhile. */
-      409: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getEdition: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        n: number;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The edition. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['Edition'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listMakers: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description All makers. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Maker'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getTilt: {
-    parameters: {
-      query: {
-        /** @description Id of a catalog record. */
-        hull: string;
-        /** @description Id of a catalog record. */
-        mount?: string;
-        /** @description Id of a catalog record. */
-        lowerUnit?: string;
-        /** @description Echoed in the answer. */
-        ref?: string;
-        /** @description Through the water. */
-        speedKn: number;
-        /** @description Wanted attitude in the water, nose-up positive. */
-        targetDeg?: number;
-        loadedMassKg?: number;
-        /** @description The boat’s own running trim, measured at this speed. */
-        measuredTrimDeg?: number;
-        measuredSigmaDeg?: number;
-        /** @description 0 with the prop shaft parallel to the keel line; swinging aft and up is positive. */
-        motorTrimDeg?: number;
-        water?: 'fresh' | 'sea';
-      };
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description Trim and tilt. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['TiltReply'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  askTilt: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody: {
-      content: {
-        /**
-         * @example {
-         *       "hull": {
-         *         "form": "shallow-v",
-         *         "lengthM": 4.2,
-         *         "deadriseDeg": 8,
-         *         "transomAngleDeg": 14,
-         *         "transomHeightMm": 400,
-         *         "material": "aluminium",
-         *         "loadedMassKg": 430
-         *       },
-         *       "speedKn": 18,
-         *       "targetDeg": 0
-         *     }
-         */
-        'application/json': components['schemas']['TiltQuestion'];
-      };
-    };
-    responses: {
-      /** @description Trim and tilt. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['TiltReply'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `body-too-large`: The body is too large. */
-      413: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `unsupported-media-type`: This kind of body is not taken here. */
-      415: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getClearance: {
-    parameters: {
-      query: {
-        /** @description Id of a catalog record. */
-        hull: string;
-        /** @description Id of a catalog record. */
-        lowerUnit?: string;
-        /** @description Id of a catalog record. */
-        transducer: string;
-        /** @description Id of a catalog record. */
-        mount?: string;
-        /** @description Echoed in the answer. */
-        ref?: string;
-        /** @description Of the sensor off the centreline, starboard positive. */
-        offsetMm: number;
-        /** @description Lower leading edge below the local bottom. */
-        dropMm: number;
-        /** @description Transom face (or board) to leading edge; the mount’s, else 25. */
-        standoffMm?: number;
-        /** @description Thickness of a transom board; added to the standoff. */
-        boardMm?: number;
-        /** @description Ahead of the transom; for through-hull, in-hull, pole and bow mounts. */
-        forwardMm?: number;
-        /** @description Bottom at the sensor below the keel line; needed on pontoons, catamarans and stepped hulls, where no vee tells it. */
-        localBottomMm?: number;
-        rollDeg?: number;
-        yawDeg?: number;
-        /** @description Set tilt against the keel line, nose-up positive. */
-        tiltDeg?: number;
-        /** @description How far a jack plate or bracket sets the engine aft. */
-        setbackMm?: number;
-        /** @description How far the engine is raised along the transom. */
-        raiseMm?: number;
-        /** @description 0 with the prop shaft parallel to the keel line; swinging aft and up is positive. */
-        motorTrimDeg?: number;
-        /** @description Positive moves the nose of the lower unit to starboard. */
-        steerDeg?: number;
-        /** @description Off the centreline, starboard positive. */
-        engineOffsetMm?: number;
-        rotation?: 'right' | 'left' | 'dual';
-        wanted?: 'both' | 'port' | 'starboard';
-      };
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description Both sides. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['ClearanceReply'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  askClearance: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody: {
-      content: {
-        /**
-         * @example {
-         *       "hull": {
-         *         "form": "shallow-v",
-         *         "lengthM": 4.2,
-         *         "deadriseDeg": 8,
-         *         "transomAngleDeg": 14,
-         *         "transomHeightMm": 400,
-         *         "material": "aluminium",
-         *         "loadedMassKg": 430
-         *       },
-         *       "lowerUnit": {
-         *         "drive": "outboard",
-         *         "powerHp": 30,
-         *         "shaftLengthMm": 381
-         *       },
-         *       "transducer": {
-         *         "kinds": [
-         *           "side"
-         *         ],
-         *         "housingLengthMm": 220
-         *       },
-         *       "offsetMm": 380,
-         *       "dropMm": 5,
-         *       "standoffMm": 30,
-         *       "tiltDeg": 0,
-         *       "motorTrimDeg": 0
-         *     }
-         */
-        'application/json': components['schemas']['ClearanceQuestion'];
-      };
-    };
-    responses: {
-      /** @description Both sides. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['ClearanceReply'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `body-too-large`: The body is too large. */
-      413: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `unsupported-media-type`: This kind of body is not taken here. */
-      415: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  askFit: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody: {
-      content: {
-        /**
-         * @example {
-         *       "ref": "job 12",
-         *       "hull": {
-         *         "form": "shallow-v",
-         *         "lengthM": 4.2,
-         *         "deadriseDeg": 8,
-         *         "transomAngleDeg": 14,
-         *         "transomHeightMm": 400,
-         *         "material": "aluminium",
-         *         "loadedMassKg": 430
-         *       },
-         *       "lowerUnits": [
-         *         {
-         *           "lowerUnit": {
-         *             "drive": "outboard",
-         *             "powerHp": 30,
-         *             "shaftLengthMm": 381
-         *           },
-         *           "motorTrimDeg": 0
-         *         }
-         *       ],
-         *       "transducer": {
-         *         "kinds": [
-         *           "side"
-         *         ],
-         *         "housingLengthMm": 220
-         *       },
-         *       "placement": {
-         *         "offsetMm": 380,
-         *         "dropMm": 5,
-         *         "standoffMm": 30
-         *       },
-         *       "running": {
-         *         "speedKn": 4,
-         *         "water": "fresh"
-         *       },
-         *       "alsoAt": [
-         *         {
-         *           "label": "cruising",
-         *           "speedKn": 18
-         *         }
-         *       ],
-         *       "target": {
-         *         "attitudeDeg": 0
-         *       }
-         *     }
-         */
-        'application/json': components['schemas']['FitQuestion'];
-      };
-    };
-    responses: {
-      /** @description The answer. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['FitAnswer'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `body-too-large`: The body is too large. */
-      413: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `unsupported-media-type`: This kind of body is not taken here. */
-      415: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getSession: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The session; `account` is null for a visitor. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['Session'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  signIn: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody: {
-      content: {
-        /**
-         * @example {
-         *       "email": "customer@tiltwright.example",
-         *       "password": "loft-floor-2026"
-         *     }
-         */
-        'application/json': components['schemas']['SignIn'];
-      };
-    };
-    responses: {
-      /** @description The session. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['Session'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. `wrong-credentials`: E-mail address or password is wrong. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `body-too-large`: The body is too large. */
-      413: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `unsupported-media-type`: This kind of body is not taken here. */
-      415: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `too-many-requests`: Too many requests. */
-      429: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  signOut: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description Signed out. */
-      204: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content?: never;
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  signUp: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody: {
-      content: {
-        /**
-         * @example {
-         *       "email": "skipper@tiltwright.example",
-         *       "password": "a long enough one",
-         *       "name": "A skipper"
-         *     }
-         */
-        'application/json': components['schemas']['SignUp'];
-      };
-    };
-    responses: {
-      /** @description The session of the new account. */
-      201: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['Session'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `email-taken`: An account with this address exists. */
-      409: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `body-too-large`: The body is too large. */
-      413: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `unsupported-media-type`: This kind of body is not taken here. */
-      415: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `too-many-requests`: Too many requests. */
-      429: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getMe: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The account. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['Account'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listKeys: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The keys without their secrets. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Key'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  createKey: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody: {
-      content: {
-        /**
-         * @example {
-         *       "name": "Stock list",
-         *       "scopes": [
-         *         "catalog:read",
-         *         "fit:compute"
-         *       ]
-         *     }
-         */
-        'application/json': components['schemas']['NewKey'];
-      };
-    };
-    responses: {
-      /** @description The key, shown once. */
-      201: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['CreatedKey'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `body-too-large`: The body is too large. */
-      413: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `unsupported-media-type`: This kind of body is not taken here. */
-      415: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  revokeKey: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description Revoked. */
-      204: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content?: never;
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listBoats: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The boats. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Boat'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listImports: {
-    parameters: {
-      query?: {
-        /** @description Rows a page, at most 200. */
-        limit?: number;
-        /** @description `next` of the page before. */
-        cursor?: string;
-      };
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description A page of imports. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['Import'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  uploadImport: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path?: never;
-      cookie?: never;
-    };
-    requestBody: {
-      content: {
-        'multipart/form-data': {
-          table: components['schemas']['Table'];
-          /**
-           * Format: binary
-           * @description The table, at most 50 MB.
-           */
-          file: string;
-        };
-      };
-    };
-    responses: {
-      /** @description The import. */
-      201: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['CreatedImport'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `body-too-large`: The body is too large. */
-      413: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `unsupported-media-type`: This kind of body is not taken here. */
-      415: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. `binary-file`: The file is not a text table. `wrong-encoding`: The file’s text encoding is not readable. `no-header`: The table has no header row. `bad-table`: The table cannot be read. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `storage-full`: There is no room left to store this. */
-      507: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getImport: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The import. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['Import'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  discardImport: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description Discarded; a check under way stops. */
-      204: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content?: never;
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `wrong-state`: The state of this thing does not allow that. */
-      409: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  checkImport: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The check has begun. */
-      202: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['Import'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `wrong-state`: The state of this thing does not allow that. */
-      409: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  listImportRows: {
-    parameters: {
-      query?: {
-        /** @description What publishing would make of a row. */
-        fate?: components['schemas']['Fate'];
-        /** @description Rows a page, at most 200. */
-        limit?: number;
-        /** @description `next` of the page before. */
-        cursor?: string;
-      };
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description A page of rows. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': {
-            data: components['schemas']['ImportRow'][];
-            /** @description Cursor of the next page; null on the last. */
-            next: string | null;
-          };
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  getImportErrors: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: never;
-    responses: {
-      /** @description The table. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'text/csv': string;
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-    };
-  };
-  publishImport: {
-    parameters: {
-      query?: never;
-      header?: never;
-      path: {
-        id: string;
-      };
-      cookie?: never;
-    };
-    requestBody?: {
-      content: {
-        /**
-         * @example {
-         *       "why": "Spring list of the builder"
-         *     }
-         */
-        'application/json': components['schemas']['PublishOrder'];
-      };
-    };
-    responses: {
-      /** @description The edition; it is committed. */
-      200: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/json': components['schemas']['PublishedEdition'];
-        };
-      };
-      /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
-      400: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
-      401: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
-      403: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `not-found`: Nothing is found here. */
-      404: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `wrong-state`: The state of this thing does not allow that. `stale-edition`: The catalog has changed meanwhile. */
-      409: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `body-too-large`: The body is too large. */
-      413: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `unsupported-media-type`: This kind of body is not taken here. */
-      415: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `invalid-input`: A value is missing or not acceptable. */
-      422: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `internal-error`: Something went wrong on our side. */
-      500: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
-      /** @description `storage-full`: There is no room left to store this. */
-      507: {
-        headers: {
-          [name: string]: unknown;
-        };
-        content: {
-          'application/problem+json': components['schemas']['Problem'];
-        };
-      };
+    listHulls: {
+        parameters: {
+            query?: {
+                /** @description Part of maker, model, package or another spelling; slips allowed. */
+                q?: string;
+                maker?: string;
+                /** @description Built in that model year. */
+                year?: number;
+                /** @description Only the generic parts, or none of them. */
+                generic?: boolean;
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+                form?: "flat" | "shallow-v" | "modified-v" | "deep-v" | "tri-hull" | "pontoon" | "catamaran" | "other";
+                lengthMinM?: number;
+                lengthMaxM?: number;
+                deadriseMinDeg?: number;
+                deadriseMaxDeg?: number;
+            };
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of hulls. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Hull"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-edition`: The catalog has changed meanwhile. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getHull: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The hull’s sheet. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["HullSheet"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listHullRevisions: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Its history. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Revision"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listLowerUnits: {
+        parameters: {
+            query?: {
+                /** @description Part of maker, model, package or another spelling; slips allowed. */
+                q?: string;
+                maker?: string;
+                /** @description Built in that model year. */
+                year?: number;
+                /** @description Only the generic parts, or none of them. */
+                generic?: boolean;
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of lower units. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["LowerUnit"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-edition`: The catalog has changed meanwhile. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getLowerUnit: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The lower unit’s sheet. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["LowerUnitSheet"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listLowerUnitRevisions: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Its history. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Revision"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listTransducers: {
+        parameters: {
+            query?: {
+                /** @description Part of maker, model, package or another spelling; slips allowed. */
+                q?: string;
+                maker?: string;
+                /** @description Built in that model year. */
+                year?: number;
+                /** @description Only the generic parts, or none of them. */
+                generic?: boolean;
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of transducers. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Transducer"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-edition`: The catalog has changed meanwhile. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getTransducer: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The transducer’s sheet. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["TransducerSheet"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listTransducerRevisions: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Its history. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Revision"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listMounts: {
+        parameters: {
+            query?: {
+                /** @description Part of maker, model, package or another spelling; slips allowed. */
+                q?: string;
+                maker?: string;
+                /** @description Built in that model year. */
+                year?: number;
+                /** @description Only the generic parts, or none of them. */
+                generic?: boolean;
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of mounts. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Mount"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-edition`: The catalog has changed meanwhile. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getMount: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The mount’s sheet. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["MountSheet"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listMountRevisions: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Its history. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Revision"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listTrimPoints: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Its points. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["TrimPoint"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getHullTrim: {
+        parameters: {
+            query: {
+                /** @description Through the water. */
+                speedKn: number;
+                loadedMassKg?: number;
+            };
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The trim with its basis and spread. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["HullTrim"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    search: {
+        parameters: {
+            query: {
+                q: string;
+                limit?: number;
+            };
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The findings. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["SearchHit"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listEditions: {
+        parameters: {
+            query?: {
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of editions. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Edition"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-edition`: The catalog has changed meanwhile. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getEdition: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                n: number;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The edition. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Edition"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listMakers: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description All makers. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Maker"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getTilt: {
+        parameters: {
+            query: {
+                /** @description Id of a catalog record. */
+                hull: string;
+                /** @description Id of a catalog record. */
+                mount?: string;
+                /** @description Id of a catalog record. */
+                lowerUnit?: string;
+                /** @description Echoed in the answer. */
+                ref?: string;
+                /** @description Through the water. */
+                speedKn: number;
+                /** @description Wanted attitude in the water, nose-up positive. */
+                targetDeg?: number;
+                loadedMassKg?: number;
+                /** @description The boat’s own running trim, measured at this speed. */
+                measuredTrimDeg?: number;
+                measuredSigmaDeg?: number;
+                /** @description 0 with the prop shaft parallel to the keel line; swinging aft and up is positive. */
+                motorTrimDeg?: number;
+                water?: "fresh" | "sea";
+            };
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Trim and tilt. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["TiltReply"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    askTilt: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "hull": {
+                 *         "form": "shallow-v",
+                 *         "lengthM": 4.2,
+                 *         "deadriseDeg": 8,
+                 *         "transomAngleDeg": 14,
+                 *         "transomHeightMm": 400,
+                 *         "material": "aluminium",
+                 *         "loadedMassKg": 430
+                 *       },
+                 *       "speedKn": 18,
+                 *       "targetDeg": 0
+                 *     }
+                 */
+                "application/json": components["schemas"]["TiltQuestion"];
+            };
+        };
+        responses: {
+            /** @description Trim and tilt. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["TiltReply"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getClearance: {
+        parameters: {
+            query: {
+                /** @description Id of a catalog record. */
+                hull: string;
+                /** @description Id of a catalog record. */
+                lowerUnit?: string;
+                /** @description Id of a catalog record. */
+                transducer: string;
+                /** @description Id of a catalog record. */
+                mount?: string;
+                /** @description Echoed in the answer. */
+                ref?: string;
+                /** @description Of the sensor off the centreline, starboard positive. */
+                offsetMm: number;
+                /** @description Lower leading edge below the local bottom. */
+                dropMm: number;
+                /** @description Transom face (or board) to leading edge; the mount’s, else 25. */
+                standoffMm?: number;
+                /** @description Thickness of a transom board; added to the standoff. */
+                boardMm?: number;
+                /** @description Ahead of the transom; for through-hull, in-hull, pole and bow mounts. */
+                forwardMm?: number;
+                /** @description Bottom at the sensor below the keel line; needed on pontoons, catamarans and stepped hulls, where no vee tells it. */
+                localBottomMm?: number;
+                rollDeg?: number;
+                yawDeg?: number;
+                /** @description Set tilt against the keel line, nose-up positive. */
+                tiltDeg?: number;
+                /** @description How far a jack plate or bracket sets the engine aft. */
+                setbackMm?: number;
+                /** @description How far the engine is raised along the transom. */
+                raiseMm?: number;
+                /** @description 0 with the prop shaft parallel to the keel line; swinging aft and up is positive. */
+                motorTrimDeg?: number;
+                /** @description Positive moves the nose of the lower unit to starboard. */
+                steerDeg?: number;
+                /** @description Off the centreline, starboard positive. */
+                engineOffsetMm?: number;
+                rotation?: "right" | "left" | "dual";
+                wanted?: "both" | "port" | "starboard";
+            };
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Both sides. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["ClearanceReply"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    askClearance: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "hull": {
+                 *         "form": "shallow-v",
+                 *         "lengthM": 4.2,
+                 *         "deadriseDeg": 8,
+                 *         "transomAngleDeg": 14,
+                 *         "transomHeightMm": 400,
+                 *         "material": "aluminium",
+                 *         "loadedMassKg": 430
+                 *       },
+                 *       "lowerUnit": {
+                 *         "drive": "outboard",
+                 *         "powerHp": 30,
+                 *         "shaftLengthMm": 381
+                 *       },
+                 *       "transducer": {
+                 *         "kinds": [
+                 *           "side"
+                 *         ],
+                 *         "housingLengthMm": 220
+                 *       },
+                 *       "offsetMm": 380,
+                 *       "dropMm": 5,
+                 *       "standoffMm": 30,
+                 *       "tiltDeg": 0,
+                 *       "motorTrimDeg": 0
+                 *     }
+                 */
+                "application/json": components["schemas"]["ClearanceQuestion"];
+            };
+        };
+        responses: {
+            /** @description Both sides. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["ClearanceReply"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    askFit: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "ref": "job 12",
+                 *       "hull": {
+                 *         "form": "shallow-v",
+                 *         "lengthM": 4.2,
+                 *         "deadriseDeg": 8,
+                 *         "transomAngleDeg": 14,
+                 *         "transomHeightMm": 400,
+                 *         "material": "aluminium",
+                 *         "loadedMassKg": 430
+                 *       },
+                 *       "lowerUnits": [
+                 *         {
+                 *           "lowerUnit": {
+                 *             "drive": "outboard",
+                 *             "powerHp": 30,
+                 *             "shaftLengthMm": 381
+                 *           },
+                 *           "motorTrimDeg": 0
+                 *         }
+                 *       ],
+                 *       "transducer": {
+                 *         "kinds": [
+                 *           "side"
+                 *         ],
+                 *         "housingLengthMm": 220
+                 *       },
+                 *       "placement": {
+                 *         "offsetMm": 380,
+                 *         "dropMm": 5,
+                 *         "standoffMm": 30
+                 *       },
+                 *       "running": {
+                 *         "speedKn": 4,
+                 *         "water": "fresh"
+                 *       },
+                 *       "alsoAt": [
+                 *         {
+                 *           "label": "cruising",
+                 *           "speedKn": 18
+                 *         }
+                 *       ],
+                 *       "target": {
+                 *         "attitudeDeg": 0
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["FitQuestion"];
+            };
+        };
+        responses: {
+            /** @description The answer. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["FitAnswer"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getSession: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The session; `account` is null for a visitor. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Session"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    signIn: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "email": "customer@tiltwright.example",
+                 *       "password": "loft-floor-2026"
+                 *     }
+                 */
+                "application/json": components["schemas"]["SignIn"];
+            };
+        };
+        responses: {
+            /** @description The session. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Session"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. `wrong-credentials`: E-mail address or password is wrong. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    signOut: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Signed out. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    signUp: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "email": "skipper@tiltwright.example",
+                 *       "password": "a long enough one",
+                 *       "name": "A skipper"
+                 *     }
+                 */
+                "application/json": components["schemas"]["SignUp"];
+            };
+        };
+        responses: {
+            /** @description The session of the new account. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Session"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `email-taken`: An account with this address exists. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getMe: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The account. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Account"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listKeys: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The keys without their secrets. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Key"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    createKey: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description A mark of the caller’s own: the same creation sent again under it within a day happens once. */
+                "Idempotency-Key"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "name": "Stock list",
+                 *       "scopes": [
+                 *         "catalog:read",
+                 *         "fit:compute"
+                 *       ]
+                 *     }
+                 */
+                "application/json": components["schemas"]["NewKey"];
+            };
+        };
+        responses: {
+            /** @description The key, shown once. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["CreatedKey"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `idempotency-at-work`: The first request is still at work. `already-created`: This was made already. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `idempotency-mismatch`: The Idempotency-Key stood for another request. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    rotateKey: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "overlapHours": 24
+                 *     }
+                 */
+                "application/json": components["schemas"]["Rotation"];
+            };
+        };
+        responses: {
+            /** @description The key with its new secret, shown once. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["CreatedKey"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    revokeKey: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Revoked. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listUsage: {
+        parameters: {
+            query?: {
+                from?: string;
+                to?: string;
+                key?: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The days with any request. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["DayOfUse"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listLimits: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The limits as they hold now. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Limit"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    changeLimit: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                /** @description anonymous: nobody signed in, by address. page: a page of this very site in a browser. account: signed in. key: a program with an API key. */
+                caller: components["schemas"]["LimitedCaller"];
+            };
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "unitsPerMinute": 6000,
+                 *       "unitsPerDay": 500000
+                 *     }
+                 */
+                "application/json": components["schemas"]["LimitSetting"];
+            };
+        };
+        responses: {
+            /** @description The limit as it holds now. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Limit"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    resetLimit: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                /** @description anonymous: nobody signed in, by address. page: a page of this very site in a browser. account: signed in. key: a program with an API key. */
+                caller: components["schemas"]["LimitedCaller"];
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description It is as configured. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listBoats: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The boats. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Boat"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listImports: {
+        parameters: {
+            query?: {
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of imports. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Import"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    uploadImport: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                "multipart/form-data": {
+                    table: components["schemas"]["Table"];
+                    /**
+                     * Format: binary
+                     * @description The table, at most 50 MB.
+                     */
+                    file: string;
+                };
+            };
+        };
+        responses: {
+            /** @description The import. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["CreatedImport"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `binary-file`: The file is not a text table. `wrong-encoding`: The file’s text encoding is not readable. `no-header`: The table has no header row. `bad-table`: The table cannot be read. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `storage-full`: There is no room left to store this. */
+            507: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getImport: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The import. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Import"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    discardImport: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Discarded; a check under way stops. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    checkImport: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The check has begun. */
+            202: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Import"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listImportRows: {
+        parameters: {
+            query?: {
+                /** @description What publishing would make of a row. */
+                fate?: components["schemas"]["Fate"];
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of rows. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["ImportRow"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getImportErrors: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The table. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "text/csv": string;
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    publishImport: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "why": "Spring list of the builder"
+                 *     }
+                 */
+                "application/json": components["schemas"]["PublishOrder"];
+            };
+        };
+        responses: {
+            /** @description The edition; it is committed. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["PublishedEdition"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. `stale-edition`: The catalog has changed meanwhile. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `storage-full`: There is no room left to store this. */
+            507: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
     };
-  };
 }

@@ -45,8 +45,35 @@ export const scopes = ['catalog:read', 'fit:compute', 'boats:write', 'webhooks:m
 export const Scope = z.enum(scopes).meta({ id: 'Scope' });
 export type Scope = z.infer<typeof Scope>;
 
+export const keyKinds = ['server', 'browser'] as const;
+export const KeyKind = z
+  .enum(keyKinds)
+  .describe('A server key is a secret and refuses browsers; a browser key can be read by anyone and works from its origins alone.')
+  .meta({ id: 'KeyKind' });
+/** What a browser key may have. */
+export const browserScopes: readonly Scope[] = ['catalog:read', 'fit:compute'];
+
+const KeyOrigin = z
+  .string()
+  .max(200)
+  .regex(/^https?:\/\/[a-z0-9.-]+(:\d{1,5})?$/, 'an origin as browsers send it: https://shop.example, no path, lower case');
+
 export const NewKey = z
-  .strictObject({ name: z.string().trim().min(1).max(80), scopes: z.array(Scope).min(1).max(scopes.length) })
+  .strictObject({
+    name: z.string().trim().min(1).max(80),
+    scopes: z.array(Scope).min(1).max(scopes.length),
+    kind: KeyKind.default('server'),
+    origins: z.array(KeyOrigin).max(20).default([]).describe('Of the pages that may use a browser key.'),
+    expiresAt: z.iso.datetime().nullable().default(null).describe('When it stops working by itself; null for never.'),
+  })
+  .refine(({ kind, origins }) => (kind === 'browser') === origins.length > 0, {
+    path: ['origins'],
+    message: 'a browser key needs at least one origin, a server key takes none',
+  })
+  .refine(({ kind, scopes }) => kind === 'server' || scopes.every((scope) => browserScopes.includes(scope)), {
+    path: ['scopes'],
+    message: `a browser key may have ${browserScopes.join(' and ')} only`,
+  })
   .meta({ id: 'NewKey' });
 export type NewKey = z.infer<typeof NewKey>;
 
@@ -56,6 +83,10 @@ export const Key = z
     name: z.string(),
     prefix: z.string().describe('How the key begins; the rest is shown once, at its creation.'),
     scopes: z.array(Scope),
+    kind: KeyKind,
+    origins: z.array(z.string()),
+    expiresAt: z.iso.datetime().nullable(),
+    previousUntil: z.iso.datetime().nullable().describe('Until then the secret before the last rotation works too.'),
     createdAt: z.iso.datetime(),
     lastUsedAt: z.iso.datetime().nullable(),
     revokedAt: z.iso.datetime().nullable(),
@@ -64,3 +95,7 @@ export const Key = z
 export type Key = z.infer<typeof Key>;
 export const CreatedKey = Key.extend({ key: z.string().describe('Shown once.') }).meta({ id: 'CreatedKey' });
 export type CreatedKey = z.infer<typeof CreatedKey>;
+
+export const Rotation = z
+  .strictObject({ overlapHours: z.number().min(0).max(168).default(24).describe('How long the old secret works beside the new one.') })
+  .meta({ id: 'Rotation' });

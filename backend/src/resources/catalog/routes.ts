@@ -62,6 +62,7 @@ function kindRoutes(deps: Deps, kind: CatalogTable): Route[] {
         query: z.strictObject(kind === 'hulls' ? hullFilter : commonFilter),
         reply: { status: 200, description: `A page of ${noun}s.`, schema: listOf(record) },
         problems: ['stale-edition'],
+        byEdition: true,
         cache: revalidate,
       },
       ({ query }) => listCatalog(deps, kind, query),
@@ -78,6 +79,7 @@ function kindRoutes(deps: Deps, kind: CatalogTable): Route[] {
         params: idParams,
         reply: { status: 200, description: `The ${noun}’s sheet.`, schema: sheet },
         problems: ['not-found'],
+        byEdition: true,
         cache: revalidate,
       },
       ({ params, req, res }) => {
@@ -96,6 +98,7 @@ function kindRoutes(deps: Deps, kind: CatalogTable): Route[] {
         params: idParams,
         reply: { status: 200, description: 'Its history.', schema: listOf(Revision) },
         problems: ['not-found'],
+        byEdition: true,
         cache: revalidate,
       },
       ({ params }) => {
@@ -128,6 +131,7 @@ function hullRoutes(deps: Deps): Route[] {
         params: idParams,
         reply: { status: 200, description: 'Its points.', schema: listOf(TrimPoint) },
         problems: ['not-found'],
+        byEdition: true,
         cache: revalidate,
       },
       ({ params }) => {
@@ -151,6 +155,7 @@ function hullRoutes(deps: Deps): Route[] {
           schema: z.strictObject({ trim: TrimAnswer, ...answerFields }).meta({ id: 'HullTrim' }),
         },
         problems: ['not-found'],
+        byEdition: true,
         cache: revalidate,
       },
       ({ params, query }) => answerHullTrim(deps, recordOrProblem(deps, 'hulls', params.id).id, query),

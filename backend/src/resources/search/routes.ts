@@ -18,6 +18,7 @@ export function searchRoutes({ db, search }: Deps): Route[] {
         may: 'catalog.read',
         query: z.strictObject({ q: z.string().trim().min(1).max(120), limit: z.int().min(1).max(200).default(20) }),
         reply: { status: 200, description: 'The findings.', schema: listOf(SearchHit) },
+        byEdition: true,
         cache: revalidate,
       },
       ({ query }) => {
