@@ -45,14 +45,14 @@ export function flowOutcomes(
 
 const radOrNull = (angleDeg: number | undefined) => (angleDeg === undefined ? null : degToRad(angleDeg));
 
-function materialOf({ material }: HullPart): 'glass-fibre' | 'aluminium' | 'other' | null {
+export function materialOf({ material }: HullPart): 'glass-fibre' | 'aluminium' | 'other' | null {
   if (material === undefined) return null;
   if (material === 'glass-fibre' || material === 'composite') return 'glass-fibre';
   return material === 'aluminium' ? 'aluminium' : 'other';
 }
 
 /** Strakes stand on both sides of the keel. */
-function nearestStrakeM({ strakes }: HullPart, offsetMm: number): number | null {
+export function nearestStrakeM({ strakes }: HullPart, offsetMm: number): number | null {
   if (strakes === undefined) return null;
   const gaps = strakes.map((strake) => Math.abs(Number(strake.split(':')[0]) - Math.abs(offsetMm)));
   return gaps.length === 0 ? Number.POSITIVE_INFINITY : mmToM(Math.min(...gaps));
