@@ -1,7 +1,7 @@
 import { type KeyboardEvent, useId, useRef } from 'react';
-import { useSearchParams } from 'react-router';
 import { controlClass } from '../../../components/ui/field.tsx';
 import { useSettled } from '../../../lib/use-settled.ts';
+import { useTextInAddress } from '../../../lib/use-text-in-address.ts';
 import { Findings } from './findings.tsx';
 
 /** Long enough to skip most keys of a word, short enough to feel at once. */
@@ -9,22 +9,10 @@ const settleMs = 150;
 
 /** The one question of the first page: a name, answered while it is typed. What was typed stays in the address. */
 export function BoatSearch() {
-  const [search, setSearch] = useSearchParams();
-  const typed = search.get('q') ?? '';
+  const [typed, setTyped] = useTextInAddress('q', settleMs);
   const q = useSettled(typed.trim(), settleMs);
   const id = useId();
   const box = useRef<HTMLDivElement>(null);
-
-  const write = (text: string) =>
-    setSearch(
-      (before) => {
-        const after = new URLSearchParams(before);
-        if (text === '') after.delete('q');
-        else after.set('q', text);
-        return after;
-      },
-      { replace: true, preventScrollReset: true },
-    );
 
   // The arrow keys walk from the field through the findings and back.
   const onKeyDown = (event: KeyboardEvent) => {
@@ -57,7 +45,7 @@ export function BoatSearch() {
             aria-describedby={`${id}-help`}
             className={`${controlClass} min-h-14 text-lead`}
             value={typed}
-            onChange={(event) => write(event.target.value)}
+            onChange={(event) => setTyped(event.target.value)}
           />
           <p id={`${id}-help`} className="text-note text-ink-2">
             Part of the name is enough, and slips are forgiven.
