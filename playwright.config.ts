@@ -18,10 +18,12 @@ const chromium = {
 
 export default defineConfig({
   testDir: 'tests/e2e',
-  timeout: 60_000,
+  timeout: 120_000,
   workers: 1,
   forbidOnly: true,
   retries: 0,
+  // Shared machines are slow at times; a page that never answers fails all the same.
+  expect: { timeout: 20_000 },
   reporter: [['list']],
   use: { baseURL: `http://127.0.0.1:${port}`, launchOptions: chromium, trace: 'retain-on-failure' },
   projects: [
