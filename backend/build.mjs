@@ -4,7 +4,7 @@ import { build } from 'esbuild';
 
 const folder = import.meta.dirname;
 await build({
-  entryPoints: { server: path.join(folder, 'src/server.ts') },
+  entryPoints: { server: path.join(folder, 'src/server.ts'), 'import-worker': path.join(folder, 'src/jobs/import-worker.ts') },
   outdir: path.join(folder, 'dist'),
   outExtension: { '.js': '.mjs' },
   bundle: true,

@@ -14,6 +14,7 @@ import { mountRoutes } from './http/mount-routes.ts';
 import { openApiDocument } from './http/openapi.ts';
 import { problemHandler } from './http/problem.ts';
 import { site } from './http/site.ts';
+import { writeGate } from './jobs/write-gate.ts';
 import { siteFolder } from './paths.ts';
 import { allRoutes } from './routes.ts';
 
@@ -55,6 +56,7 @@ export function createApp(deps: Deps, logger: Logger = pino({ level: deps.config
   api.use(preflight);
   api.use(express.json({ limit: '1mb', strict: false }));
   api.use(sameOrigin);
+  api.use(writeGate(deps.jobs));
   api.use(identify(db, config));
   api.get('/openapi.json', (_req, res) => {
     res.setHeader('Cache-Control', 'no-cache').json(document);

@@ -1,5 +1,7 @@
+import { existsSync } from 'node:fs';
 import type { Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
+import path from 'node:path';
 import Database from 'better-sqlite3';
 import { pino } from 'pino';
 import { createApp } from './app.ts';
@@ -8,6 +10,9 @@ import { connect, type Db, databaseFile } from './db/connect.ts';
 import { migrateDatabase } from './db/migrate.ts';
 import { demoAccounts, demoPassword, seedDemoWorld } from './db/seed.ts';
 import { createDeps } from './deps.ts';
+import type { ImportJobs } from './jobs/import-jobs.ts';
+import { inProcessJobs } from './jobs/in-process-jobs.ts';
+import { workerJobs } from './jobs/worker-jobs.ts';
 import { migrationsFolder, seedsFolder } from './paths.ts';
 import { recoverImports } from './resources/imports/recover-imports.ts';
 import { flushEveryMs } from './resources/usage/usage-counter.ts';
@@ -20,13 +25,17 @@ async function start(): Promise<void> {
   const config = readConfig(process.env);
   const db = openDatabase(config);
   if (config.mode !== 'production') await seedDemoWorld(db, config, seedsFolder);
-  recoverImports(db);
-  const deps = createDeps(db, config);
-  const flushing = setInterval(() => deps.usage.flush(), flushEveryMs).unref();
-  const app = createApp(deps, pino({ level: config.logLevel }));
+  const logger = pino({ level: config.logLevel });
+  const deps = createDeps(db, config, importJobs(db, config));
+  recoverImports(db, deps.jobs, (error) => logger.error({ err: error }, 'a check taken up again failed'));
+  const flushing = setInterval(() => {
+    if (!deps.jobs.isWriting()) deps.usage.flush();
+  }, flushEveryMs).unref();
+  const app = createApp(deps, logger);
   const server = await listen(app.listen.bind(app), config);
-  stopOnSignal(server, () => {
+  stopOnSignal(server, async () => {
     clearInterval(flushing);
+    await deps.jobs.close();
     deps.usage.flush();
     db.$client.close();
   });
@@ -59,11 +68,16 @@ function listen(open: (port: number, host: string, done: (error?: Error) => void
   });
 }
 
-function stopOnSignal(server: Server, end: () => void): void {
+/** The bundle has the worker beside it; run from source, imports are done in this process. */
+function importJobs(db: Db, config: Config): ImportJobs {
+  const entry = path.join(import.meta.dirname, 'import-worker.mjs');
+  return existsSync(entry) ? workerJobs(entry, config) : inProcessJobs({ db, config });
+}
+
+function stopOnSignal(server: Server, end: () => Promise<void>): void {
   const stop = () => {
     server.close(() => {
-      end();
-      process.exit(0);
+      end().finally(() => process.exit(0));
     });
     server.closeIdleConnections();
     setTimeout(() => server.closeAllConnections(), patienceMs).unref();

@@ -56,11 +56,19 @@ export class DrizzleSessionStore extends session.Store {
   /** Moves the end of a session in use; at most once a minute, since each is a durable write. */
   override touch(sid: string, _data: session.SessionData, done?: () => void): void {
     const expiresAt = Date.now() + this.#lifetimeMs;
-    this.#db
-      .update(sessions)
-      .set({ expiresAt })
-      .where(sql`${sessions.idHash} = ${hashed(sid)} AND ${sessions.expiresAt} < ${expiresAt - 60_000}`)
-      .run();
+    // While an edition is being written there is no waiting for it: the next request moves the end as well.
+    this.#db.$client.pragma('busy_timeout = 0');
+    try {
+      this.#db
+        .update(sessions)
+        .set({ expiresAt })
+        .where(sql`${sessions.idHash} = ${hashed(sid)} AND ${sessions.expiresAt} < ${expiresAt - 60_000}`)
+        .run();
+    } catch (error) {
+      if ((error as { code?: string }).code !== 'SQLITE_BUSY') throw error;
+    } finally {
+      this.#db.$client.pragma('busy_timeout = 5000');
+    }
     done?.();
   }
 }

@@ -4,11 +4,12 @@ import path from 'node:path';
 import type { Role } from '@tiltwright/shared/schemas/account.ts';
 import type { Table } from '@tiltwright/shared/schemas/catalog-record.ts';
 import type { Config } from '../config.ts';
+import { inProcessJobs } from '../jobs/in-process-jobs.ts';
 import { createAccount } from '../resources/accounts/create-account.ts';
 import { findUserByEmail } from '../resources/accounts/queries.ts';
 import { currentEdition } from '../resources/catalog/queries.ts';
 import { beginCheck, runCheck } from '../resources/imports/check-import.ts';
-import { publishImport } from '../resources/imports/publish-import.ts';
+import { beginPublish, publishImport } from '../resources/imports/publish-import.ts';
 import { importOrProblem, listRows } from '../resources/imports/queries.ts';
 import { uploadImport } from '../resources/imports/upload-import.ts';
 import { StartProblem } from '../start-problem.ts';
@@ -51,7 +52,11 @@ export async function seedDemoWorld(db: Db, config: Config, seedsFolder: string)
 async function importSeed(db: Db, config: Config, file: string, table: Table, steward: string): Promise<void> {
   const storedAs = `seed-${path.basename(path.dirname(file))}-${path.basename(file)}`;
   await copyFile(file, path.join(config.uploadsFolder, storedAs));
-  const { id } = await uploadImport({ db, config }, { table, fileName: path.basename(file), storedAs }, steward);
+  const { id } = await uploadImport(
+    { db, config, jobs: inProcessJobs({ db, config }) },
+    { table, fileName: path.basename(file), storedAs },
+    steward,
+  );
   beginCheck({ db }, id);
   await runCheck({ db, config }, id);
   const { counts, problem } = importOrProblem(db, id);
@@ -62,5 +67,6 @@ async function importSeed(db: Db, config: Config, file: string, table: Table, st
       : problem?.message;
     throw new StartProblem(`The demo table ${file} cannot be loaded: ${why}`);
   }
+  beginPublish(db, id);
   publishImport(db, id, { why: 'The demo world', holdCautions: false }, steward);
 }

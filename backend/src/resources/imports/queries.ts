@@ -1,6 +1,7 @@
 import type { Fate, Import, ImportRow } from '@tiltwright/shared/schemas/import.ts';
-import { and, asc, desc, eq, inArray, ne } from 'drizzle-orm';
+import { and, asc, desc, eq, gt, inArray, ne, type SQL } from 'drizzle-orm';
 import type { Db } from '../../db/connect.ts';
+import { importEdits } from '../../db/schema/import-work.ts';
 import { importRows, imports } from '../../db/schema/imports.ts';
 import { ApiProblem } from '../../errors.ts';
 
@@ -37,13 +38,39 @@ export function listRows(db: Db, importId: string, fate: Fate | undefined, limit
     .all();
 }
 
-export const rowsToPublish = (db: Pick<Db, 'select'>, importId: string) =>
+export const findRow = (db: Db, importId: string, n: number): ImportRowRecord | undefined =>
   db
     .select()
     .from(importRows)
-    .where(and(eq(importRows.importId, importId), inArray(importRows.fate, ['new', 'changed'])))
-    .orderBy(asc(importRows.n))
-    .all();
+    .where(and(eq(importRows.importId, importId), eq(importRows.n, n)))
+    .get();
+
+/** Rows that speak of these things, all of them where `keys` is undefined, in the file's order behind row `after`. */
+export function rowsOfKeys(db: Db, importId: string, keys: readonly string[] | undefined, after = -1, limit = 250_000): ImportRowRecord[] {
+  const read = (condition?: SQL) =>
+    db
+      .select()
+      .from(importRows)
+      .where(and(eq(importRows.importId, importId), gt(importRows.n, after), condition))
+      .orderBy(asc(importRows.n))
+      .limit(limit)
+      .all();
+  if (keys === undefined) return read();
+  const found: ImportRowRecord[] = [];
+  for (let from = 0; from < keys.length; from += keysAtOnce)
+    found.push(...read(inArray(importRows.rowKey, keys.slice(from, from + keysAtOnce))));
+  return found;
+}
+
+/** SQLite takes 32 766 variables in one statement. */
+const keysAtOnce = 10_000;
+
+export const findEdit = (db: Db, importId: string, n: number) =>
+  db
+    .select()
+    .from(importEdits)
+    .where(and(eq(importEdits.importId, importId), eq(importEdits.n, n)))
+    .get();
 
 /** An earlier import of the very same bytes. */
 export function sameFileAs(db: Db, of: ImportRecord): string | null {
@@ -57,23 +84,32 @@ export function sameFileAs(db: Db, of: ImportRecord): string | null {
 }
 
 export function toImport(db: Db, row: ImportRecord): Import {
-  const { storedAs: _storedAs, checkedAgainst: _checkedAgainst, header: _header, mapping: _mapping, fixes: _fixes, ...shown } = row;
+  const {
+    storedAs: _storedAs,
+    checkedAgainst: _checkedAgainst,
+    header: _header,
+    mapping: _mapping,
+    fixes: _fixes,
+    decimalComma: _comma,
+    ...shown
+  } = row;
   return { ...shown, sameFileAs: sameFileAs(db, row) };
 }
 
-export function toImportRow(row: ImportRowRecord, header: readonly string[]): ImportRow {
-  const { n, fate, name, recordId, errors, cautions, changes, cells } = row;
-  return {
-    n,
-    fate,
-    name,
-    record: recordId,
-    errors,
-    cautions,
-    changes,
-    cells: Object.fromEntries(header.map((column, index) => [column, cells[index] ?? ''])),
-    edits: {},
-    decision: null,
-    resolution: null,
-  };
+/** Rows as the API shows them, with what people did to them. */
+export function toImportRows(db: Db, importId: string, header: readonly string[], rows: readonly ImportRowRecord[]): ImportRow[] {
+  const numbers = rows.map(({ n }) => n);
+  const edits = db
+    .select()
+    .from(importEdits)
+    .where(and(eq(importEdits.importId, importId), inArray(importEdits.n, numbers)))
+    .all();
+  const byRow = new Map(edits.map((edit) => [edit.n, edit]));
+  return rows.map(({ n, fate, name, recordId, errors, cautions, changes, cells }) => ({
+    ...{ n, fate, name, record: recordId, errors, cautions, changes },
+    cells: Object.fromEntries(header.map((column, index) => [column || `column ${index + 1}`, cells[index] ?? ''])),
+    edits: byRow.get(n)?.cells ?? {},
+    decision: byRow.get(n)?.decision ?? null,
+    resolution: byRow.get(n)?.resolution ?? null,
+  }));
 }

@@ -1,31 +1,36 @@
 import { rm } from 'node:fs/promises';
 import path from 'node:path';
-import { guardFormula } from '@tiltwright/shared/csv/words.ts';
-import { writeRow } from '@tiltwright/shared/csv/write-table.ts';
+import { encodings } from '@tiltwright/shared/csv/encoding.ts';
+import { delimiters } from '@tiltwright/shared/csv/formats.ts';
 import { Table } from '@tiltwright/shared/schemas/catalog-record.ts';
-import { CreatedImport, Fate, Import, ImportRow, PublishedEdition, PublishOrder } from '@tiltwright/shared/schemas/import.ts';
+import { CreatedImport, Import, PublishedEdition, PublishOrder } from '@tiltwright/shared/schemas/import.ts';
 import * as z from 'zod';
 import { actorId } from '../../auth/actor.ts';
 import type { Deps } from '../../deps.ts';
-import { ApiProblem } from '../../errors.ts';
 import { decodeCursor, listOf, page, pageFields } from '../../http/cursor.ts';
 import { noStore, type Route, route } from '../../http/operation.ts';
 import { parseBody } from '../../http/validate.ts';
-import { audit } from '../audit.ts';
-import { beginCheck, runCheck } from './check-import.ts';
-import { publishImport } from './publish-import.ts';
-import { importOrProblem, listImports, listRows, setImport, toImport, toImportRow } from './queries.ts';
+import { beginCheck } from './check-import.ts';
+import { cancelCheck, discardImport } from './end-import.ts';
+import { beginPublish } from './publish-import.ts';
+import { importOrProblem, listImports, toImport } from './queries.ts';
 import { fileReceiver } from './receive-file.ts';
+import { streamEvents } from './stream-events.ts';
 import { uploadImport } from './upload-import.ts';
 
 const tag = 'Imports';
 const may = 'imports.manage';
 const cache = noStore;
 const params = z.strictObject({ id: z.string().min(1).max(80) });
-const UploadFields = z.strictObject({ table: Table });
+const UploadFields = z.strictObject({
+  table: Table,
+  headerRow: z.coerce.number().int().min(1).max(1000).optional().describe('Row of the column names, where it is not found by itself.'),
+  encoding: z.enum(encodings).optional().describe('Text encoding, where it is not found by itself.'),
+  delimiter: z.enum(delimiters).optional(),
+});
 
 export function importRoutes(deps: Deps): Route[] {
-  const { db, config } = deps;
+  const { db, config, jobs } = deps;
   const receive = fileReceiver(config.uploadsFolder, config.uploadMaxBytes);
   return [
     route(
@@ -35,7 +40,8 @@ export function importRoutes(deps: Deps): Route[] {
         path: '/imports',
         tag,
         summary: 'Upload a CSV table',
-        description: 'A form with `file` and `table`. A file that is no text table is refused and not kept.',
+        description:
+          'A form with `file` and `table`. A file that is no text table is refused and not kept. A header in words of its own is taken where a row looks like one: map it before the check.',
         may,
         multipart: UploadFields.extend({ file: z.string().meta({ format: 'binary' }).describe('The table, at most 50 MB.') }),
         reply: { status: 201, description: 'The import.', schema: CreatedImport },
@@ -45,8 +51,8 @@ export function importRoutes(deps: Deps): Route[] {
       async ({ actor, req, res }) => {
         const form = await receive(req, res);
         try {
-          const { table } = parseBody(UploadFields, form.fields);
-          const { id, status } = await uploadImport(deps, { table, ...form.file }, actorId(actor));
+          const { table, ...choices } = parseBody(UploadFields, form.fields);
+          const { id, status } = await uploadImport(deps, { table, choices, ...form.file }, actorId(actor));
           return { id, status };
         } catch (error) {
           await rm(path.join(config.uploadsFolder, form.file.storedAs), { force: true });
@@ -98,62 +104,13 @@ export function importRoutes(deps: Deps): Route[] {
         may,
         params,
         reply: { status: 202, description: 'The check has begun.', schema: Import },
-        problems: ['not-found', 'wrong-state'],
+        problems: ['not-found', 'wrong-state', 'incomplete-mapping'],
         cache,
       },
       ({ params: { id }, req }) => {
         const begun = toImport(db, beginCheck(deps, id));
-        runCheck(deps, id).catch((error: unknown) => req.log.error({ err: error }, 'check of an import failed'));
+        jobs.run({ kind: 'check', id }).catch((error: unknown) => req.log.error({ err: error }, 'check of an import failed'));
         return begun;
-      },
-    ),
-    route(
-      {
-        id: 'listImportRows',
-        method: 'get',
-        path: '/imports/{id}/rows',
-        tag,
-        summary: 'Rows with their fates, in the file’s order',
-        may,
-        params,
-        query: z.strictObject({ fate: Fate.optional(), ...pageFields }),
-        reply: { status: 200, description: 'A page of rows.', schema: listOf(ImportRow) },
-        problems: ['not-found'],
-        cache,
-      },
-      ({ params: { id }, query }) => {
-        const { header } = importOrProblem(db, id);
-        const place = decodeCursor(query.cursor, 0);
-        const { data, next } = page(listRows(db, id, query.fate, query.limit, place.after), query.limit, place);
-        return { data: data.map((row) => toImportRow(row, header ?? [])), next };
-      },
-    ),
-    route(
-      {
-        id: 'getImportErrors',
-        method: 'get',
-        path: '/imports/{id}/errors.csv',
-        tag,
-        summary: 'The wrong and conflicting rows as CSV, with a reason column',
-        may,
-        params,
-        reply: { status: 200, description: 'The table.', schema: z.string(), contentType: 'text/csv' },
-        problems: ['not-found'],
-        cache,
-      },
-      ({ params: { id }, res }) => {
-        const { header, fileName } = importOrProblem(db, id);
-        res.type('text/csv; charset=utf-8').attachment(`${path.parse(fileName).name}-errors.csv`);
-        const rows = (['error', 'conflict'] as const).flatMap((fate) => listRows(db, id, fate, 250_000, 0));
-        const lines = rows.map(({ n, cells, errors }) => ({
-          n,
-          line: writeRow([
-            ...(header ?? []).map((_, index) => guardFormula(cells[index] ?? '')),
-            errors.map(({ column, message }) => `${column}: ${message}`).join(' '),
-          ]),
-        }));
-        const body = lines.sort((a, b) => a.n - b.n).map(({ line }) => line);
-        res.send([writeRow([...(header ?? []), 'reason']), ...body].join(''));
       },
     ),
     route(
@@ -173,7 +130,10 @@ export function importRoutes(deps: Deps): Route[] {
         problems: ['not-found', 'wrong-state', 'stale-edition', 'storage-full'],
         cache,
       },
-      ({ params: { id }, body, actor }) => publishImport(db, id, body, actorId(actor)),
+      ({ params: { id }, body, actor }) => {
+        beginPublish(db, id);
+        return jobs.run({ kind: 'publish', id, order: body, actor: actorId(actor) });
+      },
     ),
     route(
       {
@@ -188,19 +148,44 @@ export function importRoutes(deps: Deps): Route[] {
         problems: ['not-found', 'wrong-state'],
         cache,
       },
-      async ({ params: { id }, actor }) => {
-        const record = importOrProblem(db, id);
-        if (record.status === 'discarded') return;
-        if (record.status === 'published') throw new ApiProblem('wrong-state', 'A published import stays; roll its edition back instead.');
-        db.transaction(
-          (tx) => {
-            setImport(tx, id, { status: 'discarded' });
-            audit(tx, actorId(actor), 'import.discard', id);
-          },
-          { behavior: 'immediate' },
-        );
-        await rm(path.join(config.uploadsFolder, record.storedAs), { force: true });
+      ({ params: { id }, actor }) => discardImport(deps, id, actorId(actor)),
+    ),
+    route(
+      {
+        id: 'cancelImport',
+        method: 'post',
+        path: '/imports/{id}/cancel',
+        tag,
+        summary: 'Stop a check under way',
+        description:
+          'The file and its mapping stay; nothing was published. Publishing is one step and cannot be stopped: roll its edition back.',
+        may,
+        params,
+        reply: { status: 200, description: 'The import, as it was before the check.', schema: Import },
+        problems: ['not-found', 'wrong-state'],
+        cache,
       },
+      ({ params: { id }, actor }) => {
+        cancelCheck(db, id, actorId(actor));
+        return toImport(db, importOrProblem(db, id));
+      },
+    ),
+    route(
+      {
+        id: 'watchImport',
+        method: 'get',
+        path: '/imports/{id}/events',
+        tag,
+        summary: 'Progress of a check or a publication, as server-sent events',
+        description: 'Each `import` event carries the import as `GET /imports/{id}` shows it; the stream ends once nothing is under way.',
+        may,
+        params,
+        reply: { status: 200, description: 'The events.', schema: z.string(), contentType: 'text/event-stream' },
+        problems: ['not-found'],
+        // Compression would hold the events back.
+        cache: 'no-store, no-transform',
+      },
+      ({ params: { id }, res }) => streamEvents(db, id, res),
     ),
   ];
 }

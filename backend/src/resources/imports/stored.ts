@@ -1,11 +1,10 @@
-// What the catalog holds, as an import looks at it.
+// What the catalog holds, as an import looks at it: by id, by name and years, by another spelling.
 import { matchKey, normaliseName } from '@tiltwright/shared/names.ts';
 import { type CatalogTable, catalogTables } from '@tiltwright/shared/schemas/catalog-record.ts';
-import { and, eq, ne, sql } from 'drizzle-orm';
+import { and, eq } from 'drizzle-orm';
 import type { Db } from '../../db/connect.ts';
-import { aliases, type Provenance, trimPoints } from '../../db/schema/catalog.ts';
-import { type CatalogRow, kinds } from '../catalog/kinds.ts';
-import { findRecord } from '../catalog/queries.ts';
+import { trimPoints } from '../../db/schema/catalog.ts';
+import { recordTable, type StoredRecord } from '../editions/record-table.ts';
 
 /** Years a record stands for; null is open. */
 export interface Years {
@@ -15,15 +14,8 @@ export interface Years {
 
 export const overlap = (a: Years, b: Years) => (a.from ?? 0) <= (b.to ?? 9999) && (b.from ?? 0) <= (a.to ?? 9999);
 
-/** A stored record as plain fields; blank fields are left out. */
-export interface StoredRecord {
-  id: string;
-  revision: number;
-  values: Record<string, unknown>;
-  provenance: Provenance;
-}
-
 export interface Stored {
+  /** Published, superseded or withdrawn. */
   byId(id: string): StoredRecord | undefined;
   /** Published records of that name (or alias) whose years overlap. */
   matching(maker: string, model: string, pack: string | undefined, years: Years): StoredRecord[];
@@ -34,51 +26,34 @@ export const yearsOf = (values: Record<string, unknown>): Years => ({
   to: (values.yearTo as number | undefined) ?? null,
 });
 
-export function toStored(kind: CatalogTable, row: CatalogRow): StoredRecord {
-  const cells = row as Record<string, unknown>;
-  const values = Object.fromEntries(
-    Object.keys(kinds[kind].fields).flatMap((field) =>
-      cells[field] === null || cells[field] === undefined ? [] : [[field, cells[field]]],
-    ),
-  );
-  return { id: row.id, revision: row.revision, values, provenance: row.provenance };
-}
-
-export function storedRecords(db: Db, kind: CatalogTable): Stored {
-  const { table } = kinds[kind];
-  const byKey = db
-    .select()
-    .from(table)
-    .where(and(eq(table.matchKey, sql.placeholder('key')), ne(table.status, 'withdrawn')))
-    .prepare();
-  const byAlias = db
-    .select({ id: aliases.recordId })
-    .from(aliases)
-    .where(and(eq(aliases.kind, kind), eq(aliases.normalised, sql.placeholder('alias'))))
-    .prepare();
+export function storedRecords({ $client: sqlite }: Pick<Db, '$client'>, kind: CatalogTable): Stored {
+  const table = recordTable(kind);
+  const select = (where: string) => sqlite.prepare(`SELECT ${table.selected} FROM ${table.name} WHERE ${where}`).raw();
+  const byId = select('id = ?');
+  const byKey = select("match_key = ? AND status <> 'withdrawn'");
+  const byAlias = sqlite.prepare('SELECT record_id FROM aliases WHERE normalised = ? AND kind = ?').pluck();
+  const find = (id: string) => {
+    const row = byId.get(id) as unknown[] | undefined;
+    return row && table.read(row);
+  };
   return {
-    byId(id) {
-      const row = findRecord(db, kind, id);
-      return row && toStored(kind, row);
-    },
+    byId: find,
     matching(maker, model, pack, years) {
-      const rows = byKey.all({ key: matchKey(maker, model, pack) }) as CatalogRow[];
+      const rows = (byKey.all(matchKey(maker, model, pack)) as unknown[][]).map((row) => table.read(row));
       const named = rows.length > 0 ? rows : viaAlias(maker, model, pack);
-      return named
-        .filter((row) => row.status === 'published' && overlap({ from: row.yearFrom, to: row.yearTo }, years))
-        .map((row) => toStored(kind, row));
+      return named.filter((record) => record.status === 'published' && overlap(yearsOf(record.values), years));
     },
   };
 
   /** The model's other spelling, of the same maker and package. */
-  function viaAlias(maker: string, model: string, pack: string | undefined): CatalogRow[] {
-    return (byAlias.all({ alias: normaliseName(model) }) as { id: string }[])
-      .map(({ id }) => findRecord(db, kind, id))
+  function viaAlias(maker: string, model: string, pack: string | undefined): StoredRecord[] {
+    return (byAlias.all(normaliseName(model), kind) as string[])
+      .map(find)
       .filter(
-        (row): row is CatalogRow =>
-          row !== undefined &&
-          normaliseName(row.maker) === normaliseName(maker) &&
-          normaliseName(row.package ?? '') === normaliseName(pack ?? ''),
+        (record): record is StoredRecord =>
+          record !== undefined &&
+          normaliseName(record.values.maker as string) === normaliseName(maker) &&
+          normaliseName((record.values.package as string | undefined) ?? '') === normaliseName(pack ?? ''),
       );
   }
 }

@@ -1,57 +1,50 @@
-// Keeps an uploaded table and looks at its head; a file that is no table is refused and not kept.
-import { createHash } from 'node:crypto';
-import { readFile, rm } from 'node:fs/promises';
+// Keeps an uploaded table and looks at what it is; a file that is no table is refused and not kept.
+import { rm } from 'node:fs/promises';
 import path from 'node:path';
-import { matchHeader } from '@tiltwright/shared/csv/headers.ts';
+import type { TableOptions } from '@tiltwright/shared/csv/formats.ts';
 import type { Table } from '@tiltwright/shared/schemas/catalog-record.ts';
+import type { Config } from '../../config.ts';
+import type { Db } from '../../db/connect.ts';
 import { imports } from '../../db/schema/imports.ts';
-import type { Deps } from '../../deps.ts';
 import { newId } from '../../ids.ts';
+import type { ImportJobs } from '../../jobs/import-jobs.ts';
 import { audit } from '../audit.ts';
 import { type ImportRecord, importOrProblem } from './queries.ts';
-import { readTable } from './read-table.ts';
 
 export interface Upload {
   table: Table;
   fileName: string;
   /** Name of the file inside the uploads folder. */
   storedAs: string;
+  /** What the sender says of the file, where it is not to be found out. */
+  choices?: Pick<TableOptions, 'headerRow' | 'encoding' | 'delimiter'>;
+}
+
+interface UploadDeps {
+  db: Db;
+  config: Pick<Config, 'uploadsFolder'>;
+  jobs: ImportJobs;
 }
 
 /** @throws ApiProblem binary-file, wrong-encoding, no-header or bad-table; the file is then gone */
-export async function uploadImport({ db, config }: Pick<Deps, 'db' | 'config'>, upload: Upload, actor: string): Promise<ImportRecord> {
-  const file = path.join(config.uploadsFolder, upload.storedAs);
+export async function uploadImport({ db, config, jobs }: UploadDeps, upload: Upload, actor: string): Promise<ImportRecord> {
+  const { table, fileName, storedAs, choices = {} } = upload;
   try {
-    const bytes = await readFile(file);
-    const table = readTable(bytes, upload.table);
+    const found = await jobs.run({ kind: 'inspect', table, storedAs, choices });
+    await jobs.untilWritable();
     const id = newId('imp');
     db.transaction(
       (tx) => {
         tx.insert(imports)
-          .values({
-            id,
-            table: upload.table,
-            status: 'uploaded',
-            fileName: upload.fileName,
-            storedAs: upload.storedAs,
-            bytes: bytes.length,
-            sha256: createHash('sha256').update(bytes).digest('hex'),
-            encoding: table.encoding,
-            delimiter: table.delimiter,
-            rows: table.rows.length,
-            header: table.header,
-            unknownColumns: matchHeader(upload.table, table.header).unknown.map(({ header }) => header),
-            createdAt: new Date().toISOString(),
-            createdBy: actor,
-          })
+          .values({ ...found, id, table, status: 'uploaded', fileName, storedAs, createdAt: new Date().toISOString(), createdBy: actor })
           .run();
-        audit(tx, actor, 'import.upload', id, { table: upload.table, fileName: upload.fileName });
+        audit(tx, actor, 'import.upload', id, { table, fileName });
       },
       { behavior: 'immediate' },
     );
     return importOrProblem(db, id);
   } catch (error) {
-    await rm(file, { force: true });
+    await rm(path.join(config.uploadsFolder, storedAs), { force: true });
     throw error;
   }
 }
