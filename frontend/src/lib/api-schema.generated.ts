@@ -396,6 +396,52 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/editions/{a}/compare/{b}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * What lies between two editions, record by record
+         * @description Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["compareEditions"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/editions/{n}/rollback": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Undo an edition by publishing the earlier values as a new one
+         * @description Fields that a later edition has set again stay and are named. Records that the edition first published become withdrawn: their id still answers, with that word. History stays.
+         *
+         *     Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["rollBackEdition"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
     "/makers": {
         parameters: {
             query?: never;
@@ -410,6 +456,54 @@ export interface paths {
          *     Costs 1 unit.
          */
         get: operations["listMakers"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/changes": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * What changed, oldest first, to be read on from where you stopped
+         * @description Begin with `after=0`, or with the number of the edition you have. Keep `next`; ask again with it whenever you like.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listChanges"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/exports/{table}.csv": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * A whole table as CSV
+         * @description Canonical columns, published records only. Texts that a spreadsheet would run carry an apostrophe. Imported again it is unchanged throughout.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["exportTable"];
         put?: never;
         post?: never;
         delete?: never;
@@ -771,7 +865,7 @@ export interface paths {
         put?: never;
         /**
          * Upload a CSV table
-         * @description A form with `file` and `table`. A file that is no text table is refused and not kept.
+         * @description A form with `file` and `table`. A file that is no text table is refused and not kept. A header in words of its own is taken where a row looks like one: map it before the check.
          *
          *     Role steward; not for API keys.
          *
@@ -836,6 +930,78 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/imports/{id}/publish": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Publish the new and changed rows as one edition
+         * @description All of them or none. Wrong, duplicate and conflicting rows are left out and stay listed; rows with cautions are published unless `holdCautions` is set.
+         *
+         *     Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["publishImport"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/imports/{id}/cancel": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Stop a check under way
+         * @description The file and its mapping stay; nothing was published. Publishing is one step and cannot be stopped: roll its edition back.
+         *
+         *     Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["cancelImport"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/imports/{id}/events": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Progress of a check or a publication, as server-sent events
+         * @description Each `import` event carries the import as `GET /imports/{id}` shows it; the stream ends once nothing is under way.
+         *
+         *     Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["watchImport"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
     "/imports/{id}/rows": {
         parameters: {
             query?: never;
@@ -880,7 +1046,31 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
-    "/imports/{id}/publish": {
+    "/imports/{id}/rows/{n}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        /**
+         * Mend one row, accept or skip it, or decide its conflict
+         * @description The row is judged again at once, and so are the rows that speak of the same record. Edits outlive a new check.
+         *
+         *     Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        patch: operations["patchImportRow"];
+        trace?: never;
+    };
+    "/imports/{id}/fixes": {
         parameters: {
             query?: never;
             header?: never;
@@ -890,14 +1080,42 @@ export interface paths {
         get?: never;
         put?: never;
         /**
-         * Publish the new and changed rows as one edition
-         * @description All of them or none. Wrong, duplicate and conflicting rows are left out and stay listed; rows with cautions are published unless `holdCautions` is set.
+         * Mend every cell of a column that reads the same
+         * @description Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["fixImportCells"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/imports/{id}/mapping": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * How the file’s columns are read: saved, remembered or suggested, with the first rows read live
+         * @description Role steward; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getImportMapping"];
+        /**
+         * Say how the file’s columns are read
+         * @description Saved also while something is missing, and then told; the check waits until nothing is. A complete mapping is remembered for files of the same header.
          *
          *     Role steward; not for API keys.
          *
          *     Costs 1 unit.
          */
-        post: operations["publishImport"];
+        put: operations["putImportMapping"];
+        post?: never;
         delete?: never;
         options?: never;
         head?: never;
@@ -1657,8 +1875,57 @@ export interface components {
             /** @description Records it added or changed. */
             records: number;
         };
+        RecordDifference: {
+            kind: components["schemas"]["Table"];
+            id: string;
+            name: string;
+            /** @description First published between the two. */
+            isNew: boolean;
+            /** @description From the earlier edition to the later; empty where all came back to what it was. */
+            changes: components["schemas"]["FieldChange"][];
+        };
+        /** @enum {string} */
+        Table: "hulls" | "lower-units" | "transducers" | "mounts" | "trim-points";
+        RolledBack: {
+            /** @description The new edition that holds the earlier values. */
+            edition: number;
+            records: number;
+            /** @description Records that the edition had first published; they are listed and found nowhere now. */
+            withdrawn: number;
+            /** @description Fields that a later edition has set again and that therefore stay, for the first 200 records. */
+            kept: components["schemas"]["KeptFields"][];
+        };
+        KeptFields: {
+            record: string;
+            fields: string[];
+        };
+        RollbackOrder: {
+            /** @description Shown in the history of every record it touches. */
+            why?: string;
+        };
         Maker: {
             name: string;
+        };
+        ChangePage: {
+            data: components["schemas"]["Change"][];
+            /** @description Go on from here, now or later. */
+            next: string;
+            /** @description There are more right away. */
+            more: boolean;
+            /** @description The newest edition. */
+            edition: number;
+        };
+        Change: {
+            kind: components["schemas"]["Table"];
+            record: string;
+            revision: number;
+            edition: number;
+            /** Format: date-time */
+            at: string;
+            why: string | null;
+            source: string | null;
+            isNew: boolean;
+            changes: components["schemas"]["FieldChange"][];
         };
         TiltReply: {
             /** @description Echoed in the answer. */
@@ -2460,8 +2727,6 @@ export interface components {
             /** @enum {string} */
             status: "uploaded" | "mapped" | "checking" | "checked" | "publishing" | "published" | "discarded" | "failed";
         };
-        /** @enum {string} */
-        Table: "hulls" | "lower-units" | "transducers" | "mounts" | "trim-points";
         Import: {
             id: string;
             table: components["schemas"]["Table"];
@@ -2499,6 +2764,14 @@ export interface components {
             /** Format: date-time */
             createdAt: string;
             createdBy: string;
+        };
+        PublishedEdition: {
+            edition: number;
+        };
+        PublishOrder: {
+            why?: string;
+            /** @default false */
+            holdCautions: boolean;
         };
         ImportRow: {
             /** @description Row number as a spreadsheet counts it. */
@@ -2541,13 +2814,110 @@ export interface components {
             code: string;
             message: string;
         };
-        PublishedEdition: {
-            edition: number;
+        RowPatch: {
+            /** @description New text by canonical column or by the file’s own header; null takes an edit back. Units as in the mapping. */
+            cells?: {
+                [key: string]: string | null;
+            };
+            /** @enum {string|null} */
+            decision?: "accept" | "skip" | null;
+            /**
+             * @description `catalog`: conflicting values stay as they are stored; `row`: the row’s values replace them.
+             * @enum {string|null}
+             */
+            resolution?: "catalog" | "row" | null;
         };
-        PublishOrder: {
-            why?: string;
-            /** @default false */
-            holdCautions: boolean;
+        FixResult: {
+            /** @description Rows that were judged again. */
+            rows: number;
+        };
+        Fix: {
+            /** @description Canonical column. */
+            column: string;
+            /** @description The cell’s text, blanks around it aside. */
+            from: string;
+            /** @description Text in its place. */
+            to: string;
+        };
+        MappingSheet: {
+            /** @description First rows of the file as they stand, to choose the header row from. */
+            top: string[][];
+            header: string[];
+            /** @description Saved, remembered from an earlier file of the same header, or suggested. */
+            mapping: {
+                /** @description Row that holds the header, counted from 1; what stands above it is left out. */
+                headerRow: number;
+                columns: components["schemas"]["MappedColumn"][];
+                /**
+                 * @description Text of a column that the file lacks: the maker of a maker’s own list, its source.
+                 * @default {}
+                 */
+                constants: {
+                    [key: string]: string;
+                };
+                /** @description Whether the comma is the decimal mark; found by itself where left out. */
+                decimalComma?: boolean;
+            };
+            /** @enum {string} */
+            origin: "saved" | "remembered" | "suggested";
+            /** @description Required columns that neither a column nor a constant fills. */
+            missing: string[];
+            /** @description Headers whose cells are not read. */
+            leftOut: string[];
+            /** @description First 20 rows as this mapping reads them. */
+            preview: components["schemas"]["PreviewRow"][];
+        };
+        MappedColumn: {
+            /** @description Place of the column in the file, counted from 0. */
+            at: number;
+            /** @description Canonical column; `years` takes model years such as 2015-18. Leave out to leave the column out. */
+            to?: string;
+            /** @description In place of `to`: one cell that holds two values, such as length × beam. */
+            split?: {
+                /** @enum {string} */
+                by: "times" | "stroke" | "dash" | "comma" | "semicolon" | "bar" | "space";
+                into: [
+                    string,
+                    string
+                ];
+            };
+            /**
+             * @description Unit of bare numbers; the column’s own where left out.
+             * @enum {string}
+             */
+            unit?: "1" | "m" | "cm" | "mm" | "in" | "ft" | "deg" | "arcmin" | "arcsec" | "rad" | "kg" | "lb" | "t" | "hp" | "ps" | "kw" | "w" | "kn" | "km/h" | "mph" | "m/s" | "khz" | "mhz" | "hz" | "db" | "%";
+            /**
+             * @description A dash, `none` or `n/a` erases the stored value.
+             * @default false
+             */
+            erase: boolean;
+        };
+        PreviewRow: {
+            n: number;
+            cells: components["schemas"]["PreviewCell"][];
+            problems: string[];
+        };
+        PreviewCell: {
+            column: string;
+            text: string;
+            /** @description As it will be stored, in the column’s unit; null for nothing stated. */
+            value?: unknown;
+            /** @description Why the cell cannot be read. */
+            problem: string | null;
+        };
+        Mapping: {
+            /** @description Row that holds the header, counted from 1; what stands above it is left out. */
+            headerRow: number;
+            columns: components["schemas"]["MappedColumn"][];
+            /**
+             * @description Text of a column that the file lacks: the maker of a maker’s own list, its source.
+             * @default {}
+             */
+            constants: {
+                [key: string]: string;
+            };
+            /** @description Whether the comma is the decimal mark; found by itself where left out. */
+            decimalComma?: boolean;
         };
     };
     responses: never;
@@ -4192,7 +4562,10 @@ export interface operations {
                 /** @description `next` of the page before. */
                 cursor?: string;
             };
-            header?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -4207,6 +4580,8 @@ export interface operations {
                     RateLimit?: string;
                     /** @description The limit: q units in w seconds. */
                     "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
                     [name: string]: unknown;
                 };
                 content: {
@@ -4216,6 +4591,13 @@ export interface operations {
                         next: string | null;
                     };
                 };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
             };
             /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
             400: {
@@ -4285,7 +4667,10 @@ export interface operations {
     getEdition: {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
             path: {
                 n: number;
             };
@@ -4302,11 +4687,20 @@ export interface operations {
                     RateLimit?: string;
                     /** @description The limit: q units in w seconds. */
                     "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
                     [name: string]: unknown;
                 };
                 content: {
                     "application/json": components["schemas"]["Edition"];
                 };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
             };
             /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
             400: {
@@ -4373,16 +4767,24 @@ export interface operations {
             };
         };
     };
-    listMakers: {
+    compareEditions: {
         parameters: {
-            query?: never;
+            query?: {
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
             header?: never;
-            path?: never;
+            path: {
+                a: number;
+                b: number;
+            };
             cookie?: never;
         };
         requestBody?: never;
         responses: {
-            /** @description All makers. */
+            /** @description Records that differ. */
             200: {
                 headers: {
                     /** @description The caller’s own, or one of ours. */
@@ -4395,7 +4797,7 @@ export interface operations {
                 };
                 content: {
                     "application/json": {
-                        data: components["schemas"]["Maker"][];
+                        data: components["schemas"]["RecordDifference"][];
                         /** @description Cursor of the next page; null on the last. */
                         next: string | null;
                     };
@@ -4421,6 +4823,423 @@ export interface operations {
             };
             /** @description `not-allowed`: This role may not do that. */
             403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-edition`: The catalog has changed meanwhile. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    rollBackEdition: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                n: number;
+            };
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "why": "The builder took the list back"
+                 *     }
+                 */
+                "application/json": components["schemas"]["RollbackOrder"];
+            };
+        };
+        responses: {
+            /** @description The new edition; it is committed. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["RolledBack"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `storage-full`: There is no room left to store this. */
+            507: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listMakers: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description All makers. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Maker"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listChanges: {
+        parameters: {
+            query?: {
+                /** @description Number of an edition, or `next` of the page before. */
+                after?: string;
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of changes. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["ChangePage"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    exportTable: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                table: components["schemas"]["Table"];
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The table. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "text/csv": string;
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
                 headers: {
                     [name: string]: unknown;
                 };
@@ -6445,6 +7264,15 @@ export interface operations {
             content: {
                 "multipart/form-data": {
                     table: components["schemas"]["Table"];
+                    /** @description Row of the column names, where it is not found by itself. */
+                    headerRow?: number;
+                    /**
+                     * @description Text encoding, where it is not found by itself.
+                     * @enum {string}
+                     */
+                    encoding?: "utf-8" | "utf-16le" | "utf-16be" | "windows-1252";
+                    /** @enum {string} */
+                    delimiter?: "," | ";" | "\t";
                     /**
                      * Format: binary
                      * @description The table, at most 50 MB.
@@ -6812,6 +7640,333 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
+            /** @description `invalid-input`: A value is missing or not acceptable. `incomplete-mapping`: A required column is not filled. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    publishImport: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "why": "Spring list of the builder"
+                 *     }
+                 */
+                "application/json": components["schemas"]["PublishOrder"];
+            };
+        };
+        responses: {
+            /** @description The edition; it is committed. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["PublishedEdition"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. `stale-edition`: The catalog has changed meanwhile. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `storage-full`: There is no room left to store this. */
+            507: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    cancelImport: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The import, as it was before the check. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Import"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    watchImport: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The events. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "text/event-stream": string;
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
             /** @description `invalid-input`: A value is missing or not acceptable. */
             422: {
                 headers: {
@@ -7034,12 +8189,13 @@ export interface operations {
             };
         };
     };
-    publishImport: {
+    patchImportRow: {
         parameters: {
             query?: never;
             header?: never;
             path: {
                 id: string;
+                n: number;
             };
             cookie?: never;
         };
@@ -7047,14 +8203,16 @@ export interface operations {
             content: {
                 /**
                  * @example {
-                 *       "why": "Spring list of the builder"
+                 *       "cells": {
+                 *         "deadrise_deg": "18"
+                 *       }
                  *     }
                  */
-                "application/json": components["schemas"]["PublishOrder"];
+                "application/json": components["schemas"]["RowPatch"];
             };
         };
         responses: {
-            /** @description The edition; it is committed. */
+            /** @description The row as it stands now. */
             200: {
                 headers: {
                     /** @description The caller’s own, or one of ours. */
@@ -7066,7 +8224,7 @@ export interface operations {
                     [name: string]: unknown;
                 };
                 content: {
-                    "application/json": components["schemas"]["PublishedEdition"];
+                    "application/json": components["schemas"]["ImportRow"];
                 };
             };
             /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
@@ -7159,8 +8317,383 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `storage-full`: There is no room left to store this. */
-            507: {
+        };
+    };
+    fixImportCells: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "column": "form",
+                 *       "from": "semi-vee",
+                 *       "to": "modified-v"
+                 *     }
+                 */
+                "application/json": components["schemas"]["Fix"];
+            };
+        };
+        responses: {
+            /** @description How many rows were judged again. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["FixResult"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. `stale-edition`: The catalog has changed meanwhile. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getImportMapping: {
+        parameters: {
+            query?: {
+                /** @description Try another header row; nothing is saved. */
+                headerRow?: number;
+            };
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The mapping and a preview. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["MappingSheet"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `no-header`: The table has no header row. `bad-table`: The table cannot be read. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    putImportMapping: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "headerRow": 3,
+                 *       "columns": [
+                 *         {
+                 *           "at": 0,
+                 *           "to": "model"
+                 *         },
+                 *         {
+                 *           "at": 1,
+                 *           "split": {
+                 *             "by": "times",
+                 *             "into": [
+                 *               "length_m",
+                 *               "beam_m"
+                 *             ]
+                 *           },
+                 *           "unit": "ft"
+                 *         },
+                 *         {
+                 *           "at": 2,
+                 *           "to": "years"
+                 *         }
+                 *       ],
+                 *       "constants": {
+                 *         "maker": "Alderwick",
+                 *         "form": "modified-v"
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["Mapping"];
+            };
+        };
+        responses: {
+            /** @description The mapping and a preview. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["MappingSheet"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `no-header`: The table has no header row. `bad-table`: The table cannot be read. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
                 headers: {
                     [name: string]: unknown;
                 };
