@@ -15,5 +15,8 @@ export function asternBounds(scene: BoatScene, widthPx: number): PaperBounds {
   const closeM = Math.max(outermostM + 0.3, 0.7);
   const halfM = widthPx < narrowPx ? Math.min(wholeM, closeM) : wholeM;
   const lowestM = Math.max(...[...outlines, ...housing].map(([, v]) => v), 0.3);
-  return { leftM: -halfM, rightM: halfM, topM: -scene.hull.transomHeightM, bottomM: lowestM + 0.1 };
+  // A motor tilted clear stands above the transom: some of it is shown, not all of the height it needs.
+  const risesM = -scene.hull.transomHeightM - Math.min(...outlines.map(([, v]) => v), -scene.hull.transomHeightM);
+  const topM = -scene.hull.transomHeightM - Math.min(risesM, 0.15);
+  return { leftM: -halfM, rightM: halfM, topM, bottomM: lowestM + 0.1 };
 }

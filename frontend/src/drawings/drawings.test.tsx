@@ -33,6 +33,11 @@ describe('the boat from astern', () => {
     expect(container.querySelector(`pattern[id="${hatch}"]`)).not.toBeNull();
   });
 
+  it('breaks a long name over lines so that it finds room', () => {
+    draw({ port: [{ ...strut, fromDeg: 2, toDeg: 46, by: 'leg of the starboard motor' }], starboard: [] });
+    expect(screen.getByText('of the starboard motor')).toBeInTheDocument();
+  });
+
   it('names every hidden or thinned part below the drawing, with a letter where it had no room', () => {
     draw({ port: [strut, sliver], starboard: [] });
     expect(screen.getByText(/port, 4° – 31° below level: hidden by the strut/)).toBeInTheDocument();
@@ -90,8 +95,7 @@ describe('the boat from the side', () => {
         lengthText={lengthText}
       />,
     );
-    expect(screen.getByText('boat 4.0° bow up')).toBeInTheDocument();
-    expect(screen.getByText('sensor level')).toBeInTheDocument();
+    expect(screen.getByText('boat 4.0° bow up, sensor level in the water')).toBeInTheDocument();
   });
 });
 

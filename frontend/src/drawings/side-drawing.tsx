@@ -4,7 +4,7 @@ import { radToDeg } from '@tiltwright/shared/engine/units.ts';
 import type { Vec3 } from '@tiltwright/shared/engine/vec3.ts';
 import { type BoatScene, housingCornersM } from './boat-scene.ts';
 import { convexOutline } from './convex-outline.ts';
-import { PaperText, ScaleBar } from './dimension-line.tsx';
+import { ScaleBar } from './dimension-line.tsx';
 import { DrawingFrame } from './drawing-frame.tsx';
 import { MotorOutlines } from './motor-outlines.tsx';
 import { paperScale, round, scaleBarMm, svgPoints } from './paper-scale.ts';
@@ -44,7 +44,7 @@ export function SideDrawing({ scene, trimRad, title, alternative, lengthText, st
     leftM: Math.min(...seen.map(([u]) => u)),
     rightM: Math.max(...seen.map(([u]) => u)) + asideM,
     topM: Math.min(...seen.map(([, v]) => v)) - 0.04,
-    bottomM: Math.max(...seen.map(([, v]) => v)) + 0.05,
+    bottomM: Math.max(...seen.map(([, v]) => v), 0.1) + 0.05,
   };
   const scale = paperScale(bounds, margins, widthPx, maxHeightPx);
   const at = (pointM: Vec3) => scale.at(onPaper(pointM));
@@ -56,16 +56,15 @@ export function SideDrawing({ scene, trimRad, title, alternative, lengthText, st
     at(toBoat(sensor.pose, [sensor.housingM.length, 0, 0])),
     at(toBoat(sensor.pose, [-1.6 * sensor.housingM.length, 0, 0])),
   ] as [Point2, Point2];
-  const attitudeDeg = radToDeg(sensor.tiltRad + trimRad);
+  const outcome = `boat ${angleWords(radToDeg(trimRad), 'bow up', 'bow down')}, sensor ${angleWords(radToDeg(sensor.tiltRad + trimRad), 'nose-up', 'nose-down')} in the water`;
   const [originX, originY] = at([0, 0, 0]);
-  // In the open water under the hull, where no line runs.
-  const wordsY = Math.max(originY, at([aheadM, 0, 0])[1]) + 36;
   const barMm = scaleBarMm(scale.pxPerM, Math.min(120, widthPx / 4));
 
   return (
     <DrawingFrame
       title={title}
       alternative={alternative}
+      outcome={outcome}
       scale={`1 : ${scale.ratio}`}
       boxRef={boxRef}
       widthPx={widthPx}
@@ -87,15 +86,6 @@ export function SideDrawing({ scene, trimRad, title, alternative, lengthText, st
       <MotorOutlines solids={scene.solids} view="side" scale={scale} move={water} />
       <polygon points={svgPoints(housing.map(scale.at))} className="fill-ink stroke-ink" strokeWidth="1" />
       <line {...ends(axis[0], axis[1])} className="stroke-rust" strokeWidth="1.25" />
-      <PaperText x={12} y={wordsY} strong>
-        {`boat ${angleWords(radToDeg(trimRad), 'bow up', 'bow down')}`}
-      </PaperText>
-      <PaperText x={12} y={wordsY + 18} className="fill-rust" strong>
-        {`sensor ${angleWords(attitudeDeg, 'nose-up', 'nose-down')}`}
-      </PaperText>
-      <PaperText x={12} y={wordsY + 34} className="fill-ink-2">
-        in the water
-      </PaperText>
       <ScaleBar x={12} y={scale.heightPx - 10} lengthPx={(barMm / 1000) * scale.pxPerM} text={lengthText(barMm)} />
     </DrawingFrame>
   );
@@ -105,7 +95,7 @@ function ends([x1, y1]: Point2, [x2, y2]: Point2) {
   return { x1: round(x1), y1: round(y1), x2: round(x2), y2: round(y2) };
 }
 
-/** "4.0° bow up", "level": short, because it stands on the drawing. */
+/** "4.0° bow up", "level": short, because it stands at the head of the drawing. */
 function angleWords(deg: number, up: string, down: string): string {
   const size = Math.abs(deg).toFixed(1);
   return Number(size) === 0 ? 'level' : `${size}° ${deg > 0 ? up : down}`;

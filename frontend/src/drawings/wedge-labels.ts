@@ -56,7 +56,10 @@ export function wedgeLabels(fans: readonly Fan[], originPx: Point2, radiusPx: nu
     const clear = wedges.filter((wedge) => wedge.kind === 'clear').sort((a, b) => b.toDeg - b.fromDeg - (a.toDeg - a.fromDeg))[0];
     return wedges.flatMap((wedge): WedgeLabel[] => {
       if (wedge.kind === 'clear' && wedge !== clear) return [];
-      const words = wedge.by === null ? ['clear', degreeRange(wedge.fromDeg, wedge.toDeg)] : [`${wedge.kind} by`, `the ${wedge.by}`];
+      const words =
+        wedge.by === null
+          ? ['clear', degreeRange(wedge.fromDeg, wedge.toDeg)]
+          : [`${wedge.kind} by`, ...`the ${wedge.by}`.split(/ (?=of the )/)];
       const roomForWords = placeOf(words, side, wedge, originPx, radiusPx, paper);
       if (roomForWords || wedge.kind === 'clear') return [{ side, wedge, letter: null, atPx: roomForWords, lines: words }];
       const letter = String.fromCharCode(65 + letters++);

@@ -117,6 +117,6 @@ describe('the check', { timeout: 30_000 }, () => {
 
   it('says which part the catalog does not have', async () => {
     open('/fit?hull=hul_gone');
-    expect(await verdict().findByText('Nothing is kept under this address.')).toBeInTheDocument();
+    expect(await verdict().findByText('The catalog has no such boat.')).toBeInTheDocument();
   });
 });

@@ -6,9 +6,9 @@ import { AddressNotes } from '../../features/fit/components/address-notes.tsx';
 import { Answers } from '../../features/fit/components/answers.tsx';
 import { FitAstern, FitSideAndAbove } from '../../features/fit/components/fit-drawings.tsx';
 import { FitInputs } from '../../features/fit/components/fit-inputs.tsx';
+import { PartFailure } from '../../features/fit/components/part-failure.tsx';
 import { Verdict } from '../../features/fit/components/verdict.tsx';
 import { fitQuestionOf } from '../../features/fit/fit-question.ts';
-import { partWord } from '../../features/fit/fit-url.ts';
 import { useFitParts } from '../../features/fit/use-fit-parts.ts';
 import { useFitState } from '../../features/fit/use-fit-state.ts';
 import { hullFormWords } from '../../lib/form-words.ts';
@@ -51,7 +51,7 @@ export default function Fit() {
         <PageTitle title={boat ? `Check a fit: ${boat}` : 'Check a fit'} className="text-body">
           Check a fit{boat && `: ${boat}`}
         </PageTitle>
-        {failed && <Failure error={failed.error} what={`read the ${partWord(failed.kind)}`} retry={failed.retry} />}
+        {failed && <PartFailure {...failed} />}
         {fit.isError && !failed && <Failure error={fit.error} what="work out this check" retry={() => void fit.refetch()} />}
         {answer ? <Verdict answer={answer} state={state} stale={stale} /> : !fit.isError && <Pending what="Working it out" />}
       </section>

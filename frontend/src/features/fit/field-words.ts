@@ -27,6 +27,7 @@ const special: Record<string, string> = {
   'mount tiltMin': 'least tilt on the scale',
   'mount tiltMax': 'greatest tilt on the scale',
   steerMax: 'greatest steering angle',
+  measuredTrim: 'running angle',
   measuredSigma: 'scatter of your measurement',
 };
 

@@ -36,6 +36,7 @@ export function fitScene(state: FitState, parts: ResolvedParts, tiltDeg: number,
   const numbers = middleNumbers(prepared);
   const { solids, poseAt } = sceneOf(prepared, numbers);
   const { transducer, hull } = parts;
+  const hasSide = transducer.kinds.includes('side');
   return {
     hull: hullShape(numbers.hull, state.localBottomMm ?? undefined),
     beamM: hull.beamM ?? Math.max(usualBeam(hull.lengthM).value, numbers.hull.chineBeamM),
@@ -54,8 +55,8 @@ export function fitScene(state: FitState, parts: ResolvedParts, tiltDeg: number,
       tiltRad: degToRad(tiltDeg),
     },
     sectors: {
-      port: state.wanted === 'starboard' ? null : sectorsOf(clearance?.port?.sectors, state),
-      starboard: state.wanted === 'port' ? null : sectorsOf(clearance?.starboard?.sectors, state),
+      port: state.wanted === 'starboard' || !hasSide ? null : sectorsOf(clearance?.port?.sectors, state),
+      starboard: state.wanted === 'port' || !hasSide ? null : sectorsOf(clearance?.starboard?.sectors, state),
     },
   };
 }

@@ -62,7 +62,7 @@ function SideRows({ name, side, state }: { name: SideName; side: SideAnswer; sta
         <td className="py-2 text-right font-firm whitespace-nowrap">
           {sideWords(side)}
           {side.probabilityClear !== null && (
-            <span className="block text-note font-normal text-ink-2">{formatShare(side.probabilityClear)} sure to be clear</span>
+            <span className="block text-note font-normal text-ink-2">chance of clear: {formatShare(side.probabilityClear)}</span>
           )}
         </td>
       </tr>

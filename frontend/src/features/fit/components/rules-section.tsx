@@ -34,7 +34,7 @@ export function SurerSection({ answer, state }: { answer: FitAnswer; state: FitS
   if (!dominantInput && !nextMeasurement) return null;
   const named = (path: string) => {
     const { subject, name } = fieldWords(path, state);
-    return path.includes('.') ? `${subject}: ${name}` : path;
+    return subject === 'running' ? `The ${name}` : `The ${name} of the ${subject}`;
   };
   return (
     <AnswerSection title="What would make it surer">
