@@ -61,6 +61,11 @@ function ToCheck({ record, words }: { record: Import; words: string }) {
   const check = useCheckImport(record.id);
   return (
     <div className="flex flex-col items-start gap-3">
+      {record.needsMapping && (
+        <Notice tone="care" title="Its headings are in words of their own.">
+          <p className="text-ink-2">Each column has to be given one of our names before the rows can be checked.</p>
+        </Notice>
+      )}
       {check.isError && <Failure error={check.error} what="check the table" />}
       <div className="flex flex-wrap gap-3">
         <Button kind="main" onClick={() => check.mutate()} busy={check.isPending && 'Starting …'}>
@@ -155,7 +160,9 @@ function Remarks({ record: { sameFileAs, unknownColumns, status } }: { record: I
     <>
       {sameFileAs && (
         <Notice tone="care" title="The very same file was uploaded before.">
-          <Link to={paths.stewardImport(sameFileAs)}>See what became of it</Link>
+          <Link to={paths.stewardImport(sameFileAs)} className="inline-flex min-h-11 items-center">
+            See what became of it
+          </Link>
         </Notice>
       )}
       {unknownColumns.length > 0 && (

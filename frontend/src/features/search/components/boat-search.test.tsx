@@ -70,7 +70,7 @@ describe('the search for a boat', () => {
     await userEvent.type(screen.getByRole('searchbox'), 'heron', { delay: null });
     const link = await screen.findByRole('link', { name: /Testyard Heron 42/ });
     expect(link).toHaveAttribute('href', '/hulls/hul_1');
-    expect(link).toHaveTextContent('2016 – 2022 · shallow vee · 4.2\u00a0m · deadrise 8.0°');
+    expect(link).toHaveTextContent('2016 – 2022 · shallow vee · 4.2 m · deadrise 8.0°');
     expect(asked).toEqual(['/api/v1/hulls?q=heron&limit=8']);
     expect(screen.getByRole('status')).toHaveTextContent('One boat found.');
   });
