@@ -45,13 +45,11 @@ test('a steward uploads a table with two new rows and a wrong one, publishes it,
 test('a picture named .csv is refused with its reason, and nothing changes', async ({ page }) => {
   await signIn(page, 'steward');
   await page.goto('/steward');
-  await page
-    .getByLabel('File')
-    .setInputFiles({
-      name: 'hulls.csv',
-      mimeType: 'text/csv',
-      buffer: Buffer.from([0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a, 0, 0, 0, 13]),
-    });
+  await page.getByLabel('File').setInputFiles({
+    name: 'hulls.csv',
+    mimeType: 'text/csv',
+    buffer: Buffer.from([0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a, 0, 0, 0, 13]),
+  });
   await page.getByRole('button', { name: /upload and check/i }).click();
   await expect(page.getByRole('alert').first()).toContainText(/picture|image|binary|text/i);
   await expect(page).toHaveURL(/\/steward$/);

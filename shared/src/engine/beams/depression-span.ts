@@ -4,7 +4,6 @@ import { inverse, rotate } from '../rotation.ts';
 import type { SideElement } from '../sensor.ts';
 import type { Prism } from '../solids/prism.ts';
 import type { Shape } from '../solids/solid.ts';
-import { reachM } from '../thresholds.ts';
 import { dot, type Vec3 } from '../vec3.ts';
 import type { Fan, Side } from './fan.ts';
 import type { SeenSolid } from './seen-solid.ts';
@@ -18,12 +17,12 @@ export interface Span {
 const marginRad = 1e-9;
 
 /** Steps of the fan that can meet the solid; null where none can. */
-export function depressionSpan(seen: SeenSolid, side: Side, fan: Fan, element: SideElement): Span | null {
+export function depressionSpan(seen: SeenSolid, side: Side, fan: Fan, element: SideElement, reachM: number): Span | null {
   const { shape } = seen.solid;
   const steps = fan.depressionsRad.length;
   const whole = { first: 0, last: steps - 1 };
   const sign = side === 'starboard' ? 1 : -1;
-  if (shape.kind === 'prism') return staysOutside(shape.planes, seen, sign, fan, element) ? null : whole;
+  if (shape.kind === 'prism') return staysOutside(shape.planes, seen, sign, fan, element, reachM) ? null : whole;
   const { turn, face } = seen;
   const half = halfSizes(shape);
   const back = inverse(turn);
@@ -66,7 +65,14 @@ export function depressionSpan(seen: SeenSolid, side: Side, fan: Fan, element: S
 }
 
 /** Whether some plane of a prism keeps every ray of the slab outside. */
-function staysOutside(planes: Float64Array, { turn, face }: SeenSolid, sign: number, fan: Fan, element: SideElement): boolean {
+function staysOutside(
+  planes: Float64Array,
+  { turn, face }: SeenSolid,
+  sign: number,
+  fan: Fan,
+  element: SideElement,
+  reachM: number,
+): boolean {
   const sinAlong = Math.sin(element.alongTrackWidthRad / 2);
   const back = inverse(turn);
   const from = fan.depressionsRad[0] as number;

@@ -39,18 +39,25 @@ export function rayDirection(side: Side, depressionRad: number, alongRad: number
 
 /**
  * Share of the slab lost in every direction of the fan, for one side.
- * A ray keeps Π(1 − opacity) of the solids it meets within 5 m; each direction averages cells × {−h/2, 0, +h/2}.
+ * A ray keeps Π(1 − opacity) of the solids it meets within the limit (5 m); each direction averages cells × {−h/2, 0, +h/2}.
  */
-export function castSlab(solids: readonly Solid[], sensor: Pose, element: SideElement, fan: Fan, side: Side): SlabProfile {
+export function castSlab(
+  solids: readonly Solid[],
+  sensor: Pose,
+  element: SideElement,
+  fan: Fan,
+  side: Side,
+  limitM: number = reachM,
+): SlabProfile {
   const steps = fan.depressionsRad.length;
   const opaque = new Int32Array(steps * ways);
   const veils: { opacity: number; cells: Int32Array }[] = [];
   const bySolid = solids.map((solid) => {
     const seen = seenBy(sensor, solid);
-    const span = depressionSpan(seen, side, fan, element);
+    const span = depressionSpan(seen, side, fan, element, limitM);
     if (!span) return null;
     const cells = solid.opacity >= 1 ? opaque : new Int32Array(steps * ways);
-    const own = castSolid(seen, span, element, fan, side, cells);
+    const own = castSolid(seen, span, element, fan, side, cells, limitM);
     if (own && cells !== opaque) veils.push({ opacity: solid.opacity, cells });
     return own;
   });
@@ -71,9 +78,9 @@ export function isSlabClear(solids: readonly Solid[], sensor: Pose, element: Sid
   const inTheWay: Solid[] = [];
   for (const solid of solids) {
     const seen = seenBy(sensor, solid);
-    const span = depressionSpan(seen, side, fan, element);
+    const span = depressionSpan(seen, side, fan, element, reachM);
     if (!span) continue;
-    const own = castSolid(seen, span, element, fan, side, new Int32Array(fan.depressionsRad.length * ways));
+    const own = castSolid(seen, span, element, fan, side, new Int32Array(fan.depressionsRad.length * ways), reachM);
     if (!own) continue;
     if (shareTaken(fan, own) > 1 - least + 1e-12) return false;
     inTheWay.push(solid);
@@ -90,12 +97,31 @@ export function shareTaken(fan: Fan, taken: Float64Array): number {
 }
 
 /** Marks the cells one solid takes and counts them, each weighed by its opacity; null where it takes none. */
-function castSolid(seen: SeenSolid, span: Span, element: SideElement, fan: Fan, side: Side, cells: Int32Array): Float64Array | null {
+function castSolid(
+  seen: SeenSolid,
+  span: Span,
+  element: SideElement,
+  fan: Fan,
+  side: Side,
+  cells: Int32Array,
+  limitM: number,
+): Float64Array | null {
   const { solid, turn, face } = seen;
   const sinAlong = Math.sin(element.alongTrackWidthRad / 2);
   const cosAlong = Math.cos(element.alongTrackWidthRad / 2);
   const shadow = emptyShadow();
-  const family: RayFamily = { ox: face[0], oy: face[1], oz: face[2], ex: turn[0], ey: turn[3], ez: turn[6], dx: 0, dy: 0, dz: 0, reachM };
+  const family: RayFamily = {
+    ox: face[0],
+    oy: face[1],
+    oz: face[2],
+    ex: turn[0],
+    ey: turn[3],
+    ez: turn[6],
+    dx: 0,
+    dy: 0,
+    dz: 0,
+    reachM: limitM,
+  };
   const cellM = element.apertureM / apertureCells;
   const middle = (apertureCells - 1) / 2;
   let own: Float64Array | null = null;
@@ -153,7 +179,7 @@ function testCells({ shape }: Solid, f: RayFamily, from: number, to: number, ape
   let taken = 0;
   for (let cell = from; cell <= to; cell++) {
     const s = cellOffsetM(cell, apertureM);
-    if (enterShape(shape, f.ox + s * f.ex, f.oy + s * f.ey, f.oz + s * f.ez, f.dx, f.dy, f.dz) <= reachM) taken |= 1 << cell;
+    if (enterShape(shape, f.ox + s * f.ex, f.oy + s * f.ey, f.oz + s * f.ez, f.dx, f.dy, f.dz) <= f.reachM) taken |= 1 << cell;
   }
   return taken;
 }
