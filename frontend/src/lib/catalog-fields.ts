@@ -21,6 +21,8 @@ const fieldsByTable: Record<Table, Readonly<Record<string, z.ZodType>>> = {
 
 /** Names, years and remarks stand at the head of a sheet, not among its values. */
 const headFields = new Set(['maker', 'model', 'package', 'yearFrom', 'yearTo', 'aliases', 'notes']);
+/** Words that are kept letter for letter. */
+const namedFields = new Set([...headFields, 'hullMaker', 'hullModel', 'hullPackage', 'condition']);
 
 /** The fields a sheet lists, in the order of the schema. */
 export function sheetFields(table: CatalogTable): readonly string[] {
@@ -65,8 +67,8 @@ export function formatFieldValue(table: Table, field: string, value: unknown, un
 function formatWord(field: string, word: string, units: UnitChoice): string {
   if (field === 'form') return isForm(word) ? hullFormWords(word) : word;
   if (field === 'strakes') return strakeWords(word, units);
-  // Names and remarks are kept letter for letter; the closed lists of words are written with spaces.
-  return headFields.has(field) || field.startsWith('hull') ? word : word.replaceAll('-', ' ');
+  // The closed lists of words are written with spaces.
+  return namedFields.has(field) ? word : word.replaceAll('-', ' ');
 }
 
 function isForm(word: string): word is HullForm {

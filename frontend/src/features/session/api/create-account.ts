@@ -1,7 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import type { Session, SignUp } from '@tiltwright/shared/schemas/account.ts';
 import { api, bodyOf } from '../../../lib/api-client.ts';
-import { sessionQuery } from './get-session.ts';
+import { become } from './become.ts';
 
 export function createAccount(body: SignUp): Promise<Session> {
   return bodyOf(api.POST('/accounts', { body }));
@@ -12,9 +12,6 @@ export function useCreateAccount() {
   const client = useQueryClient();
   return useMutation({
     mutationFn: createAccount,
-    onSuccess: (session) => {
-      client.clear();
-      client.setQueryData(sessionQuery.queryKey, session);
-    },
+    onSuccess: (session) => become(client, session),
   });
 }

@@ -1,6 +1,6 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { api, bodyOf } from '../../../lib/api-client.ts';
-import { sessionQuery } from './get-session.ts';
+import { become } from './become.ts';
 
 export function endSession() {
   return bodyOf(api.DELETE('/session'));
@@ -11,9 +11,6 @@ export function useEndSession() {
   const client = useQueryClient();
   return useMutation({
     mutationFn: endSession,
-    onSuccess: async () => {
-      client.clear();
-      await client.invalidateQueries({ queryKey: sessionQuery.queryKey });
-    },
+    onSuccess: () => become(client, { account: null, expiresAt: null }),
   });
 }
