@@ -99,6 +99,7 @@ describe(`for any boat (${runs} cases each)`, () => {
     let cases = 0;
     forAny((between) => {
       const hull = { ...randomHull(between), transomAngleRad: degToRad(13) };
+      // The plate reaches no farther forward than the torpedo, as on real motors.
       const unit = { ...randomLowerUnit(between), torpedoNoseForwardM: 0.08, plateForwardM: 0.05, propAftM: 0.25 };
       const setting = { ...randomSetting(between, 0), setbackM: between(0.15, 0.3), motorTrimRad: 0, steerRad: 0 };
       const sensor = sensorPose(hull, { ...randomSensor(between), offsetM: between(0.3, 0.6), tiltRad: 0, rollRad: 0, yawRad: 0 });

@@ -56,6 +56,8 @@ export function isNear(side: BothSides['port']): boolean {
 }
 
 function verdictOf(f: Findings, codes: readonly ReasonCode[]): Verdict {
+  // A placement that cannot be is no ground for a no; a bottom nobody described is no excuse for one.
+  if (f.faults.some((fault) => fault !== 'local-bottom-unknown')) return 'cannot-tell';
   if (f.rules.no) return 'does-not-fit';
   if (f.faults.length > 0) return 'cannot-tell';
   if (codes.includes('blocked-at-every-setting')) return 'does-not-fit';
