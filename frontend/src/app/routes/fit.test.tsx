@@ -6,11 +6,13 @@ import type { ResolvedParts } from '@tiltwright/shared/questions/parts.ts';
 import { FitQuestion } from '@tiltwright/shared/schemas/fit.ts';
 import { createMemoryRouter, RouterProvider } from 'react-router';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
+import type { FitJob, FitResult } from '../../features/fit/fit-job.ts';
 import { createQueryClient } from '../../lib/query-client.ts';
 import Fit from './fit.tsx';
 
 /** A server that answers with the product's own engine, so that page and answer belong together. */
 const asked: FitQuestion[] = [];
+const jobs: FitQuestion[] = [];
 let down = false;
 
 async function serve(request: Request): Promise<Response> {
@@ -31,6 +33,7 @@ function problem(status: number, code: string, detail: string): Response {
 
 beforeEach(() => {
   asked.length = 0;
+  jobs.length = 0;
   down = false;
   const Native = globalThis.Request;
   // The page's addresses are relative; outside a browser they need a place to be relative to.
@@ -50,6 +53,17 @@ configure({ asyncUtilTimeout: 8000 });
 afterEach(() => {
   vi.unstubAllGlobals();
 });
+
+/** Works jobs out in the page's own thread, as the real worker does beside it. */
+class WorkerHere {
+  onmessage: ((event: { data: FitResult }) => void) | null = null;
+  onerror: (() => void) | null = null;
+  postMessage({ id, question, parts, edition }: FitJob) {
+    jobs.push(question);
+    setTimeout(() => this.onmessage?.({ data: { id, answer: answerFit(question, parts, { edition }) } }), 0);
+  }
+  terminate() {}
+}
 
 function open(address: string) {
   const router = createMemoryRouter([{ path: '/fit', Component: Fit }], { initialEntries: [address] });
@@ -118,5 +132,29 @@ describe('the check', { timeout: 30_000 }, () => {
   it('says which part the catalog does not have', async () => {
     open('/fit?hull=hul_gone');
     expect(await verdict().findByText('The catalog has no such boat.')).toBeInTheDocument();
+  });
+
+  describe('in a browser with workers', () => {
+    beforeEach(() => {
+      vi.stubGlobal('Worker', WorkerHere);
+    });
+
+    it('asks the server once and works changes out beside the page, whole once the hand rests', async () => {
+      const router = open('/fit?motorTrimDeg=2');
+      await verdict().findByText(/The port side is/);
+      fireEvent.change(screen.getByRole('slider', { name: 'Motor trim while scanning, slider' }), { target: { value: '17' } });
+      expect(await verdict().findByText('Both sides look out freely.')).toBeInTheDocument();
+      expect(asked.map((question) => question.lowerUnits[0]?.motorTrimDeg)).toEqual([2]);
+      expect(jobs.at(-1)?.uncertainty).not.toBe('none');
+      await waitFor(() => expect(router.state.location.search).toContain('motorTrimDeg=17&edition=7'));
+    });
+
+    it('works out what it can on the device when no connection is there, and says so', async () => {
+      down = true;
+      open('/fit?motorTrimDeg=17');
+      expect(await verdict().findByText(/worked out on this device/)).toBeInTheDocument();
+      expect(verdict().getByText('Both sides look out freely.')).toBeInTheDocument();
+      expect(verdict().queryByText('No connection.')).not.toBeInTheDocument();
+    });
   });
 });

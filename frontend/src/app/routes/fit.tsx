@@ -1,40 +1,30 @@
-import { useEffect, useMemo, useRef } from 'react';
+import { useEffect, useMemo } from 'react';
 import { PageTitle } from '../../components/ui/page-title.tsx';
 import { Failure, Pending } from '../../components/ui/states.tsx';
-import { useFit } from '../../features/fit/api/post-fit.ts';
 import { AddressNotes } from '../../features/fit/components/address-notes.tsx';
 import { Answers } from '../../features/fit/components/answers.tsx';
 import { FitAstern, FitSideAndAbove } from '../../features/fit/components/fit-drawings.tsx';
 import { FitInputs } from '../../features/fit/components/fit-inputs.tsx';
 import { PartFailure } from '../../features/fit/components/part-failure.tsx';
 import { Verdict } from '../../features/fit/components/verdict.tsx';
-import { fitQuestionOf } from '../../features/fit/fit-question.ts';
+import { useFitAnswer } from '../../features/fit/use-fit-answer.ts';
 import { useFitParts } from '../../features/fit/use-fit-parts.ts';
 import { useFitState } from '../../features/fit/use-fit-state.ts';
 import { hullFormWords } from '../../lib/form-words.ts';
 import { formatQuantity } from '../../lib/format-units.ts';
 import { useUnits } from '../../lib/unit-choice.ts';
-import { useSettled } from '../../lib/use-settled.ts';
-
-/** Long enough to skip the steps of a moving slider, short enough to feel at once. */
-const settleMs = 120;
 
 export default function Fit() {
   const { state, change, refused, forgetRefused, stamp, stampWith } = useFitState();
   const units = useUnits();
-  const settled = useSettled(state, settleMs);
-  const question = useMemo(() => fitQuestionOf(settled), [settled]);
-  const fit = useFit(question);
-  const { parts, names, failed } = useFitParts(state);
-
-  // The last answer stays on the screen while the next is on its way, and when it does not come.
-  const last = useRef(fit.data);
-  if (fit.data) last.current = fit.data;
-  const answer = last.current;
-  const stale = state !== settled || fit.isPlaceholderData || fit.isError;
+  const { resolve, names, failed } = useFitParts(state);
+  const parts = useMemo(() => resolve(state), [resolve, state]);
+  const { answer, moving, stale, error, retry, onDevice } = useFitAnswer(state, resolve, stamp.edition);
 
   // A fresh answer stamps the address; one that came from a link keeps its stamp, so that what changed can be said.
-  const fresh = fit.data && !stale ? fit.data : undefined;
+  const fresh = stale || onDevice ? undefined : answer;
+  // The drawings follow the hand; they are pale only while they cannot.
+  const pale = stale && moving === answer;
   const unstamped = stamp.edition === null && stamp.engineVersion === null;
   useEffect(() => {
     if (fresh && unstamped) stampWith({ edition: fresh.edition, engineVersion: fresh.engineVersion });
@@ -52,15 +42,16 @@ export default function Fit() {
           Check a fit{boat && `: ${boat}`}
         </PageTitle>
         {failed && <PartFailure {...failed} />}
-        {fit.isError && !failed && <Failure error={fit.error} what="work out this check" retry={() => void fit.refetch()} />}
-        {answer ? <Verdict answer={answer} state={state} stale={stale} /> : !fit.isError && <Pending what="Working it out" />}
+        {error !== null && !failed && <Failure error={error} what="work out this check" retry={retry} />}
+        {onDevice && <p className="text-note text-ink-2">The server is out of reach: worked out on this device.</p>}
+        {answer ? <Verdict answer={answer} state={state} stale={stale} /> : error === null && !failed && <Pending what="Working it out" />}
       </section>
       <div className="contents bg-sheet desk:col-start-2 desk:row-span-2 desk:row-start-2 desk:block desk:border-x desk:border-rule">
         <div className="contents desk:sticky desk:top-0 desk:block">
           {parts ? (
             <>
-              <FitAstern state={state} parts={parts} answer={answer} stale={stale} change={change} />
-              <FitSideAndAbove state={state} parts={parts} answer={answer} stale={stale} />
+              <FitAstern state={state} parts={parts} answer={moving} stale={pale} change={change} />
+              <FitSideAndAbove state={state} parts={parts} answer={moving} stale={pale} />
             </>
           ) : (
             !failed && <Pending what="Fetching the parts" />

@@ -1,8 +1,26 @@
 import { queryOptions, skipToken, useQuery } from '@tanstack/react-query';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 
+/** A hull with its measured running angles, as a question takes them. */
+async function hullWithTrimPoints(id: string, signal: AbortSignal) {
+  const params = { path: { id } };
+  const [sheet, points] = await Promise.all([
+    bodyOf(api.GET('/hulls/{id}', { params, signal })),
+    bodyOf(api.GET('/hulls/{id}/trim-points', { params, signal })),
+  ]);
+  const trimPoints = points.data.map(({ speedKn, trimDeg, sigmaDeg, runs, loadedMassKg, motorTrimDeg }) => ({
+    speedKn,
+    trimDeg,
+    sigmaDeg,
+    runs,
+    loadedMassKg,
+    motorTrimDeg,
+  }));
+  return { ...sheet, trimPoints };
+}
+
 const parts = {
-  hull: (id: string, signal: AbortSignal) => bodyOf(api.GET('/hulls/{id}', { params: { path: { id } }, signal })),
+  hull: hullWithTrimPoints,
   motor: (id: string, signal: AbortSignal) => bodyOf(api.GET('/lower-units/{id}', { params: { path: { id } }, signal })),
   sensor: (id: string, signal: AbortSignal) => bodyOf(api.GET('/transducers/{id}', { params: { path: { id } }, signal })),
   mount: (id: string, signal: AbortSignal) => bodyOf(api.GET('/mounts/{id}', { params: { path: { id } }, signal })),
