@@ -77,7 +77,8 @@ function importJobs(db: Db, config: Config): ImportJobs {
 function stopOnSignal(server: Server, end: () => Promise<void>): void {
   const stop = () => {
     server.close(() => {
-      end().finally(() => process.exit(0));
+      const leave = () => process.exit(0);
+      end().then(leave, leave);
     });
     server.closeIdleConnections();
     setTimeout(() => server.closeAllConnections(), patienceMs).unref();

@@ -52,7 +52,7 @@ export function catalogWriter(sqlite: Database.Database, kind: CatalogTable, edi
       );
     }
     if (status !== 'published') index.remove(id);
-    else if (!before || before.status !== 'published' || nameFields.some((field) => field in write.values)) {
+    else if (before?.status !== 'published' || nameFields.some((field) => field in write.values)) {
       history.maker(values.maker);
       index.put(id, values);
     }

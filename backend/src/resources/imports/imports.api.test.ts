@@ -1,10 +1,11 @@
 import { readdirSync } from 'node:fs';
 import { Edition, Revision } from '@tiltwright/shared/schemas/edition.ts';
 import { Hull, HullSheet } from '@tiltwright/shared/schemas/hull.ts';
-import { CreatedImport, Import, ImportRow, PublishedEdition } from '@tiltwright/shared/schemas/import.ts';
+import { type Import, ImportRow, PublishedEdition } from '@tiltwright/shared/schemas/import.ts';
 import { expect, test } from 'vitest';
 import * as z from 'zod';
-import { callers, expectProblem, parsed, type TestApp, testApp } from '../../../../tests/support/test-app.ts';
+import { checked, settled, upload } from '../../../../tests/support/import-steps.ts';
+import { callers, expectProblem, parsed, testApp } from '../../../../tests/support/test-app.ts';
 import { listOf } from '../../http/cursor.ts';
 import { currentEdition } from '../catalog/queries.ts';
 
@@ -14,25 +15,6 @@ const twoNewOneWrong = [
   'Alderwick,Moorhen 52,modified-v,17\' 1",2.1,18,13,Alderwick list',
   'Alderwick,Moorhen 60,modified-v,6.0,2.3,steep,13,Alderwick list',
 ].join('\n');
-
-type Agent = Awaited<ReturnType<TestApp['as']>>;
-const upload = (agent: Agent, text: string | Buffer, table = 'hulls', name = 'hulls.csv') =>
-  agent.post('/api/v1/imports').field('table', table).attach('file', Buffer.from(text), name);
-
-async function checked(agent: Agent, text: string, table = 'hulls'): Promise<Import> {
-  const { id } = parsed(CreatedImport, await upload(agent, text, table).expect(201));
-  await agent.post(`/api/v1/imports/${id}/check`).expect(202);
-  return settled(agent, id);
-}
-
-async function settled(agent: Agent, id: string): Promise<Import> {
-  for (let tries = 0; tries < 200; tries++) {
-    const found = parsed(Import, await agent.get(`/api/v1/imports/${id}`).expect(200));
-    if (found.status !== 'checking') return found;
-    await new Promise((resolve) => setTimeout(resolve, 10));
-  }
-  throw new Error('the check did not end');
-}
 
 test('two new rows and a wrong one: counted, explained, published, found with slips in the name', async () => {
   const app = testApp();
