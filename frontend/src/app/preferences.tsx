@@ -36,7 +36,7 @@ export function Preferences() {
         <span className="sr-only">Units and light: </span>
         {units.length} · {units.speed} · {units.mass}
       </summary>
-      <div className="absolute right-0 z-10 flex w-72 flex-col gap-4 border border-ink bg-sheet p-4">
+      <div className="z-10 flex flex-col gap-4 border max-tablet:fixed max-tablet:inset-x-4 max-tablet:top-14 tablet:absolute tablet:right-0 tablet:w-72 border-ink bg-sheet p-4">
         <ChoiceRow
           legend="Lengths"
           name="length-unit"

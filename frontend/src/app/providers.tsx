@@ -5,7 +5,7 @@ import { createQueryClient } from '../lib/query-client.ts';
 
 export function Providers({ children }: { children: ReactNode }) {
   const [client] = useState(createQueryClient);
-  const firstAddress = useRef(window.location.pathname);
+  const firstAddress = useRef({ address: window.location.pathname, moved: false });
   return (
     <QueryClientProvider client={client}>
       <FocusedAddress value={firstAddress}>{children}</FocusedAddress>

@@ -52,7 +52,7 @@ export function HullFinding({ hull }: { hull: Hull }) {
     formatYears(hull.yearFrom, hull.yearTo),
     hullFormWords(hull.form),
     formatQuantity(hull.lengthM, 'lengthM', units),
-    hull.deadriseDeg === undefined ? null : `deadrise ${formatQuantity(hull.deadriseDeg, 'angleDeg', units)}`,
+    hull.deadriseDeg === undefined ? null : `deadrise\u00a0${formatQuantity(hull.deadriseDeg, 'angleDeg', units)}`,
     hull.generic ? 'usual values for boats of this kind' : null,
   ];
   return <Line to={paths.hull(hull.id)} name={<Name {...hull} />} about={about.filter(Boolean).join(' · ')} />;
