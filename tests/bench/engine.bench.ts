@@ -2,7 +2,8 @@
 import { cpus } from 'node:os';
 import { fanOf } from '@tiltwright/shared/engine/beams/fan.ts';
 import { sideClearance } from '@tiltwright/shared/engine/beams/occlusion.ts';
-import { castSlab, cellOffsetM, rayDirection } from '@tiltwright/shared/engine/beams/slab.ts';
+import { slabShare } from '@tiltwright/shared/engine/beams/slab.ts';
+import { cellOffsetM, rayDirection } from '@tiltwright/shared/engine/beams/slab-runs.ts';
 import { toBoat } from '@tiltwright/shared/engine/frames.ts';
 import { placementMap } from '@tiltwright/shared/engine/placement.ts';
 import { rotate } from '@tiltwright/shared/engine/rotation.ts';
@@ -93,8 +94,8 @@ function rays(): void {
   const fan = fanOf(element);
   const count = 2 * fan.depressionsRad.length * 17 * 3;
   const own = rate(() => {
-    castSlab(closed, sensor, element, fan, 'port');
-    castSlab(closed, sensor, element, fan, 'starboard');
+    slabShare(closed, sensor, element, fan, 'port');
+    slabShare(closed, sensor, element, fan, 'starboard');
   });
   const trees = closed.map((solid) => new MeshBVH(meshOf(solid)));
   const list: three.Ray[] = [];

@@ -2,7 +2,7 @@
 
 import type { Fan, Side } from '@tiltwright/shared/engine/beams/fan.ts';
 import type { NearestPass } from '@tiltwright/shared/engine/beams/least-clearance.ts';
-import { apertureCells, cellOffsetM, rayDirection } from '@tiltwright/shared/engine/beams/slab.ts';
+import { apertureCells, cellOffsetM, rayDirection } from '@tiltwright/shared/engine/beams/slab-runs.ts';
 import { type Pose, toBoat } from '@tiltwright/shared/engine/frames.ts';
 import { rotate } from '@tiltwright/shared/engine/rotation.ts';
 import type { SideElement } from '@tiltwright/shared/engine/sensor.ts';

@@ -1,7 +1,8 @@
 // The slab cast the plain way, ray by ray and solid by solid: what the engine's fast way must agree with.
 
 import type { Fan, Side } from '@tiltwright/shared/engine/beams/fan.ts';
-import { apertureCells, type SlabProfile } from '@tiltwright/shared/engine/beams/slab.ts';
+import type { SlabProfile } from '@tiltwright/shared/engine/beams/slab.ts';
+import { apertureCells } from '@tiltwright/shared/engine/beams/slab-runs.ts';
 import type { Pose } from '@tiltwright/shared/engine/frames.ts';
 import { rotate } from '@tiltwright/shared/engine/rotation.ts';
 import type { SideElement } from '@tiltwright/shared/engine/sensor.ts';

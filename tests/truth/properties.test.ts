@@ -1,7 +1,8 @@
 // What must hold for any boat. `DEEP=1` runs a thousand cases of each, an ordinary run fewer.
 import { fanOf } from '@tiltwright/shared/engine/beams/fan.ts';
 import { clearShare } from '@tiltwright/shared/engine/beams/sectors.ts';
-import { castSlab, cellOffsetM } from '@tiltwright/shared/engine/beams/slab.ts';
+import { castSlab } from '@tiltwright/shared/engine/beams/slab.ts';
+import { cellOffsetM } from '@tiltwright/shared/engine/beams/slab-runs.ts';
 import { toBoat } from '@tiltwright/shared/engine/frames.ts';
 import { legPose, lowerUnitSolids } from '@tiltwright/shared/engine/lower-unit.ts';
 import { attitudeRotation, inverse, rotate } from '@tiltwright/shared/engine/rotation.ts';

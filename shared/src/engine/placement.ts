@@ -1,7 +1,6 @@
 // Where else could it go? Clear shares over a grid of places, and the best distinct ones.
 import { fanOf, type Side } from './beams/fan.ts';
-import { clearShare } from './beams/sectors.ts';
-import { castSlab } from './beams/slab.ts';
+import { slabShare } from './beams/slab.ts';
 import type { HullShape } from './hull.ts';
 import { type SensorSetting, type SideElement, sensorPose } from './sensor.ts';
 import type { Solid } from './solids/solid.ts';
@@ -39,7 +38,7 @@ export function placementMap(
     for (const dropM of grid.dropsM) {
       for (const tiltRad of grid.tiltsRad) {
         const sensor = sensorPose(hull, { ...setting, offsetM, dropM, tiltRad });
-        const share = (side: Side) => clearShare(fan, castSlab(solids, sensor, element, fan, side).blocked);
+        const share = (side: Side) => slabShare(solids, sensor, element, fan, side);
         port[at] = share('port');
         starboard[at] = share('starboard');
         at++;

@@ -1,6 +1,6 @@
 // One set of numbers put to the engine: running trim and clearance.
 
-import type { Side } from '../engine/beams/fan.ts';
+import { fanOf, type Side } from '../engine/beams/fan.ts';
 import { type SideClearance, sideClearance, type TiltWindow, tiltWindow } from '../engine/beams/occlusion.ts';
 import { addInQuadrature, type Estimate } from '../engine/estimate.ts';
 import type { Pose } from '../engine/frames.ts';
@@ -122,7 +122,8 @@ export function clearanceFor(p: Prepared, n: FitNumbers, scene: Scene, tiltDeg: 
   if (!p.parts.transducer.kinds.includes('side')) return null;
   const element = input.sideElement(p.parts.transducer, n.transducer);
   const sensor = scene.poseAt(degToRad(tiltDeg));
-  const of = (side: Side) => sideClearance(scene.solids, sensor, element, side, wavelengthM(n));
+  const fan = fanOf(element);
+  const of = (side: Side) => sideClearance(scene.solids, sensor, element, side, wavelengthM(n), fan);
   return { port: of('port'), starboard: of('starboard') };
 }
 

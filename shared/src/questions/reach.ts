@@ -1,7 +1,6 @@
 // What other settings within reach would do for a wanted side: motor trims under power, tilts of the bracket.
 import { fanOf, type Side } from '../engine/beams/fan.ts';
-import { clearShare } from '../engine/beams/sectors.ts';
-import { castSlab } from '../engine/beams/slab.ts';
+import { slabShare } from '../engine/beams/slab.ts';
 import { motorTrimReach } from '../engine/lower-unit.ts';
 import { clearFrom, shadedFrom } from '../engine/thresholds.ts';
 import { degToRad, radToDeg } from '../engine/units.ts';
@@ -40,24 +39,35 @@ export function reachOf(
   const [least, greatest] = tilts;
   const clearByTilt = nearestClearDeg !== null && nearestClearDeg >= least && nearestClearDeg <= greatest;
   const trims = trimSettings(p, n);
-  const openness = (trimShare: number, tiltDeg: number) => leastShare(p, atTrim(n, trims, trimShare), tiltDeg, wanted);
-  const shares = Array.from({ length: trimSteps + 1 }, (_, i) => i / trimSteps);
-  const clearByMotorTrim = trims.length > 0 && shares.some((share) => goesUp(n, trims, share) && openness(share, setDeg) >= clearFrom);
+  const element = input.sideElement(p.parts.transducer, n.transducer);
+  const fan = fanOf(element);
+  const opennessWith = (numbers: FitNumbers) => {
+    const { solids, poseAt } = sceneOf(p, numbers);
+    return (tiltDeg: number, enough: number) =>
+      Math.min(...wanted.map((side) => slabShare(solids, poseAt(degToRad(tiltDeg)), element, fan, side, enough)));
+  };
+  // Motor trims from the highest down: the higher, the farther aft the lower unit.
+  const shares = trims.length > 0 ? Array.from({ length: trimSteps + 1 }, (_, i) => 1 - i / trimSteps) : [0];
+  const raised = shares.filter((share) => goesUp(n, trims, share));
+  const clearByMotorTrim = raised.some((share) => opennessWith(atTrim(n, trims, share))(setDeg, clearFrom) >= clearFrom);
   if (clearByTilt || clearByMotorTrim || wanted.every((side) => sides[side].verdict !== 'blocked')) {
     return { unblocked: true, clearByMotorTrim, clearByTilt, best: null };
   }
   let most = Math.min(...wanted.map((side) => sides[side].clearShare));
   let best = { numbers: n, tiltDeg: setDeg };
-  for (const share of trims.length > 0 ? shares : [0]) {
-    for (let i = 0; i <= tiltSteps; i++) {
+  for (const share of shares) {
+    const numbers = atTrim(n, trims, share);
+    const openness = opennessWith(numbers);
+    for (let i = tiltSteps; i >= 0; i--) {
       const tiltDeg = least + ((greatest - least) * i) / tiltSteps;
-      const open = openness(share, tiltDeg);
+      const open = openness(tiltDeg, most);
       if (open <= most) continue;
       most = open;
-      best = { numbers: atTrim(n, trims, share), tiltDeg };
+      best = { numbers, tiltDeg };
+      if (most >= shadedFrom) return { unblocked: true, clearByMotorTrim, clearByTilt, best: null };
     }
   }
-  return { unblocked: most >= shadedFrom, clearByMotorTrim, clearByTilt, best };
+  return { unblocked: false, clearByMotorTrim, clearByTilt, best };
 }
 
 /** Tilts against the keel line that the bracket can be set to; ±20° where none is named. */
@@ -92,12 +102,4 @@ function atTrim(n: FitNumbers, trims: readonly TrimSetting[], share: number): Fi
 
 function goesUp(n: FitNumbers, trims: readonly TrimSetting[], share: number): boolean {
   return atTrim(n, trims, share).engines.some((engine, i) => engine.motorTrimDeg > (n.engines[i] as { motorTrimDeg: number }).motorTrimDeg);
-}
-
-function leastShare(p: Prepared, n: FitNumbers, tiltDeg: number, wanted: readonly Side[]): number {
-  const scene = sceneOf(p, n);
-  const element = input.sideElement(p.parts.transducer, n.transducer);
-  const fan = fanOf(element);
-  const sensor = scene.poseAt(degToRad(tiltDeg));
-  return Math.min(...wanted.map((side) => clearShare(fan, castSlab(scene.solids, sensor, element, fan, side).blocked)));
 }

@@ -1,8 +1,7 @@
 // The same questions put to the engine many times, every uncertain input drawn anew.
 import type { Side } from '../engine/beams/fan.ts';
 import { fanOf } from '../engine/beams/fan.ts';
-import { clearShare } from '../engine/beams/sectors.ts';
-import { castSlab } from '../engine/beams/slab.ts';
+import { slabShare } from '../engine/beams/slab.ts';
 import { clearFrom, shadedFrom } from '../engine/thresholds.ts';
 import type { TrimPoint } from '../engine/trim/running-trim.ts';
 import { interval90, normalScores, shareOfVariance, varianceOf } from '../engine/uncertainty.ts';
@@ -66,7 +65,7 @@ export function sampleClearance(p: Prepared, n: FitNumbers, tiltDeg: number, sid
     const element = input.sideElement(p.parts.transducer, drawn.transducer);
     const fan = fanOf(element);
     const sensor = poseAt(degToRad(tiltDeg + setTiltSigmaDeg * (tiltScores[draw] as number)));
-    for (const side of sides) samples[side].values[draw] = clearShare(fan, castSlab(solids, sensor, element, fan, side).blocked);
+    for (const side of sides) samples[side].values[draw] = slabShare(solids, sensor, element, fan, side);
   }
   return samples;
 }

@@ -19,6 +19,10 @@ const tiltSteps = 8;
 export function swingGapMm(p: Prepared, n: FitNumbers, setDeg: number, wideMm: number): number {
   const hull = input.hullShape(n.hull, p.placing.localBottomMm);
   const housing = housingPoints(p, n, setDeg);
+  const wideM = mmToM(wideMm);
+  const mean = (axis: 0 | 1 | 2) => housing.reduce((sum, point) => sum + point[axis], 0) / housing.length;
+  const middle: Vec3 = [mean(0), mean(1), mean(2)];
+  const housingRadius = Math.max(...housing.map((point) => Math.hypot(point[0] - middle[0], point[1] - middle[1], point[2] - middle[2])));
   let least = Number.POSITIVE_INFINITY;
   enginesOf(p, n).forEach(({ unit, setting }, index) => {
     const reach = motorTrimReach(hull, unit);
@@ -28,13 +32,10 @@ export function swingGapMm(p: Prepared, n: FitNumbers, setDeg: number, wideMm: n
         const motorTrimRad = reach.min + ((reach.maxTilted - reach.min) * j) / (tiltSteps - 1);
         const solids = lowerUnitSolids(unit, legPose(hull, unit, { ...setting, steerRad, motorTrimRad }), index);
         for (const solid of solids) {
-          const radius = boundingRadiusM(solid.shape);
-          for (const point of housing) {
-            const [x, y, z] = solid.pose.originM;
-            const far = Math.hypot(point[0] - x, point[1] - y, point[2] - z) - radius;
-            if (far > mmToM(wideMm)) least = Math.min(least, far);
-            else least = Math.min(least, distanceToSolid(solid, point));
-          }
+          const [x, y, z] = solid.pose.originM;
+          const apart = Math.hypot(middle[0] - x, middle[1] - y, middle[2] - z) - boundingRadiusM(solid.shape) - housingRadius;
+          if (apart > wideM) least = Math.min(least, apart);
+          else for (const point of housing) least = Math.min(least, distanceToSolid(solid, point));
         }
       }
     }

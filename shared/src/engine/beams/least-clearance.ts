@@ -9,7 +9,7 @@ import { marginRangeM, reachM } from '../thresholds.ts';
 import type { Vec3 } from '../vec3.ts';
 import type { Fan, Side } from './fan.ts';
 import { type SeenSolid, seenBy } from './seen-solid.ts';
-import { apertureCells, cellOffsetM, rayDirection } from './slab.ts';
+import { apertureCells, cellOffsetM, rayDirection } from './slab-runs.ts';
 
 export interface NearestPass {
   /** Smallest distance of a ray to any solid but the hull, m. */

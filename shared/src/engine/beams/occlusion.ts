@@ -7,7 +7,7 @@ import { degToRad } from '../units.ts';
 import { type Fan, fanOf, type Side } from './fan.ts';
 import { diffractionMarginM, nearestPass } from './least-clearance.ts';
 import { clearShare, type Sector, sectorsOf } from './sectors.ts';
-import { castSlab, isSlabClear } from './slab.ts';
+import { castSlab, slabShare } from './slab.ts';
 
 export interface SideClearance {
   verdict: SideVerdict;
@@ -67,7 +67,7 @@ export function tiltWindow(
     const seen = known.get(step);
     if (seen !== undefined) return seen;
     const sensor = poseAt(step * windowStepRad);
-    const clear = sides.every((side) => isSlabClear(solids, sensor, element, fan, side, clearFrom));
+    const clear = sides.every((side) => slabShare(solids, sensor, element, fan, side, clearFrom) >= clearFrom);
     known.set(step, clear);
     return clear;
   };

@@ -16,6 +16,8 @@ export interface RayFamily {
   dy: number;
   dz: number;
   reachM: number;
+  /** The rays' starts lie within ±half of o. */
+  halfM: number;
 }
 
 /**
@@ -85,28 +87,56 @@ function alongRay(shadow: Shadow, a: number, g: number, w: number, reachM: numbe
   limit(shadow, -g, a + w);
 }
 
-/** Rays through the space behind planes (four numbers a plane, in the rays' axes). At most 8 planes. */
-export function prismShadow(planes: Float64Array, f: RayFamily, shadow: Shadow): void {
+/** What of a prism's planes does not change with the rays' direction. */
+export interface PrismTerms {
+  planes: Float64Array;
+  /** Two numbers a plane: how fast s turns toward it, and the room from o to it. */
+  room: Float64Array;
+  /** Room for one number a plane: how fast t turns toward it. */
+  rates: Float64Array;
+}
+
+export function prismTerms(planes: Float64Array, { ox, oy, oz, ex, ey, ez }: RayFamily): PrismTerms {
+  const count = planes.length / 4;
+  const room = new Float64Array(2 * count);
+  for (let i = 0; i < count; i++) {
+    const x = planes[4 * i] as number;
+    const y = planes[4 * i + 1] as number;
+    const z = planes[4 * i + 2] as number;
+    room[2 * i] = x * ex + y * ey + z * ez;
+    room[2 * i + 1] = (planes[4 * i + 3] as number) - x * ox - y * oy - z * oz;
+  }
+  return { planes, room, rates: new Float64Array(count) };
+}
+
+/** Rays through the space behind planes, given in the rays' axes. */
+export function prismShadow({ planes, room, rates }: PrismTerms, f: RayFamily, shadow: Shadow): void {
   beginWhole(shadow);
-  for (let i = 0; i < planes.length; i += 4) {
-    const rate = (planes[i] as number) * f.dx + (planes[i + 1] as number) * f.dy + (planes[i + 2] as number) * f.dz;
-    const turn = (planes[i] as number) * f.ex + (planes[i + 1] as number) * f.ey + (planes[i + 2] as number) * f.ez;
-    const room =
-      (planes[i + 3] as number) - (planes[i] as number) * f.ox - (planes[i + 1] as number) * f.oy - (planes[i + 2] as number) * f.oz;
-    // rate · t ≤ room − turn · s, against 0 ≤ t ≤ reach and against every plane of the other sign.
-    if (rate >= 0) {
-      limit(shadow, turn, room);
-      continue;
+  const count = rates.length;
+  for (let i = 0; i < count; i++) {
+    const rate = (planes[4 * i] as number) * f.dx + (planes[4 * i + 1] as number) * f.dy + (planes[4 * i + 2] as number) * f.dz;
+    const turn = room[2 * i] as number;
+    const free = room[2 * i + 1] as number;
+    rates[i] = rate;
+    // rate · t ≤ free − turn · s, against 0 ≤ t ≤ reach.
+    const furthest = rate >= 0 ? free : free - rate * f.reachM;
+    limit(shadow, turn, furthest);
+    // Every ray starts outside this plane and none comes back in reach.
+    if (furthest + Math.abs(turn) * f.halfM < 0) {
+      shadow.low = Number.POSITIVE_INFINITY;
+      return;
     }
-    limit(shadow, turn, room - rate * f.reachM);
-    for (let j = 0; j < planes.length; j += 4) {
-      const other = (planes[j] as number) * f.dx + (planes[j + 1] as number) * f.dy + (planes[j + 2] as number) * f.dz;
+  }
+  for (let i = 0; i < count; i++) {
+    const rate = rates[i] as number;
+    if (rate >= 0) continue;
+    const turn = room[2 * i] as number;
+    const free = room[2 * i + 1] as number;
+    for (let j = 0; j < count; j++) {
+      const other = rates[j] as number;
       if (other <= 0) continue;
-      const otherTurn = (planes[j] as number) * f.ex + (planes[j + 1] as number) * f.ey + (planes[j + 2] as number) * f.ez;
-      const otherRoom =
-        (planes[j + 3] as number) - (planes[j] as number) * f.ox - (planes[j + 1] as number) * f.oy - (planes[j + 2] as number) * f.oz;
-      // (room − turn s)/rate ≤ (otherRoom − otherTurn s)/other, with rate < 0 < other.
-      limit(shadow, other * turn - rate * otherTurn, other * room - rate * otherRoom);
+      // (free − turn s)/rate ≤ (free' − turn' s)/rate', with rate < 0 < rate'.
+      limit(shadow, other * turn - rate * (room[2 * j] as number), other * free - rate * (room[2 * j + 1] as number));
     }
   }
 }
