@@ -54,7 +54,11 @@ export default function Fit() {
               <FitSideAndAbove state={state} parts={parts} answer={moving} stale={pale} />
             </>
           ) : (
-            !failed && <Pending what="Fetching the parts" />
+            !failed && (
+              <div className="min-h-80 px-4">
+                <Pending what="Fetching the parts" />
+              </div>
+            )
           )}
         </div>
       </div>

@@ -1,5 +1,6 @@
 import { useParams } from 'react-router';
 import { ButtonLink } from '../../components/ui/button.tsx';
+import { HullDrawings } from '../../features/hulls/components/hull-drawings.tsx';
 import { RunningTrim } from '../../features/hulls/components/running-trim.tsx';
 import { PartSheet, Section } from '../../features/parts/components/part-sheet.tsx';
 import { hullFormWords } from '../../lib/form-words.ts';
@@ -27,9 +28,14 @@ export default function Hull() {
       )}
     >
       {(sheet) => (
-        <Section title="Running trim">
-          <RunningTrim hull={sheet} />
-        </Section>
+        <>
+          <Section title="At the transom">
+            <HullDrawings hull={sheet} />
+          </Section>
+          <Section title="Running trim">
+            <RunningTrim hull={sheet} />
+          </Section>
+        </>
       )}
     </PartSheet>
   );

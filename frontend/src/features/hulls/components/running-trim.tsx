@@ -41,7 +41,7 @@ function Curve({ hull, points }: { hull: HullSheet; points: readonly TrimPoint[]
         <TrimPointsTable points={points} />
       ) : (
         <Empty title="Nobody has measured this hull’s running trim yet.">
-          <p>Until somebody does, it is worked out from the hull’s shape and load, and is the less sure for it.</p>
+          <p>Until somebody does, it is worked out from shape and load, or taken as usual for its kind, and is the less sure for it.</p>
         </Empty>
       )}
     </>
