@@ -58,13 +58,11 @@ function SideRows({ name, side, state }: { name: SideName; side: SideAnswer; sta
             <HatchSwatch kind={kind} />
           </span>
           {name}
-        </th>
-        <td className="py-2 text-right font-firm whitespace-nowrap">
-          {sideWords(side)}
           {side.probabilityClear !== null && (
-            <span className="block text-note font-normal text-ink-2">chance of clear: {formatShare(side.probabilityClear)}</span>
+            <span className="block pl-8 text-note text-ink-2">chance of clear: {formatShare(side.probabilityClear)}</span>
           )}
-        </td>
+        </th>
+        <td className="py-2 text-right align-top font-firm whitespace-nowrap">{sideWords(side)}</td>
       </tr>
       {side.sectors.map((sector) => (
         <tr key={sector.fromDeg} className="border-b border-rule text-note text-ink-2">

@@ -6,24 +6,41 @@ import { fieldWords } from '../field-words.ts';
 import type { FitState } from '../fit-state.ts';
 import { AnswerSection } from './answer-rows.tsx';
 
-const outcomeWords: Record<RuleOutcome['outcome'], string> = { ok: 'in order', caution: 'with care', no: 'no', unknown: 'not known' };
+const outcomeWords: Record<RuleOutcome['outcome'], string> = { ok: 'In order', caution: 'With care', no: 'No', unknown: 'Not known' };
 
-/** Rules of fit and flow, the ones that matter first. */
+/** Rules of fit and flow: what needs care stands open, what is in order is folded away but counted. */
 export function RulesSection({ title, rules }: { title: string; rules: readonly RuleOutcome[] }) {
   if (rules.length === 0) return null;
   const weight = { no: 0, caution: 1, unknown: 2, ok: 3 };
-  const sorted = [...rules].sort((a, b) => weight[a.outcome] - weight[b.outcome]);
+  const open = rules.filter(({ outcome }) => outcome !== 'ok').sort((a, b) => weight[a.outcome] - weight[b.outcome]);
+  const inOrder = rules.filter(({ outcome }) => outcome === 'ok');
   return (
     <AnswerSection title={title}>
-      <ul>
-        {sorted.map(({ rule, outcome, text }) => (
-          <li key={rule} className="flex flex-wrap justify-between gap-x-4 border-b border-rule py-2">
-            <span className="min-w-0 flex-1">{text}</span>
-            <span className={outcome === 'no' ? 'font-firm text-rust' : 'text-ink-2'}>{outcomeWords[outcome]}</span>
-          </li>
-        ))}
-      </ul>
+      {open.length > 0 && <RuleList rules={open} />}
+      {inOrder.length > 0 && (
+        <details>
+          <summary className="flex min-h-11 w-fit items-center underline underline-offset-4">
+            {inOrder.length} {open.length > 0 ? 'more ' : ''}in order
+          </summary>
+          <RuleList rules={inOrder} />
+        </details>
+      )}
     </AnswerSection>
+  );
+}
+
+function RuleList({ rules }: { rules: readonly RuleOutcome[] }) {
+  return (
+    <ul>
+      {rules.map(({ rule, outcome, text }) => (
+        <li key={rule} className="border-b border-rule py-2">
+          {outcome !== 'ok' && (
+            <span className={`font-firm ${outcome === 'no' ? 'text-rust' : 'text-ink'}`}>{outcomeWords[outcome]}: </span>
+          )}
+          {text}
+        </li>
+      ))}
+    </ul>
   );
 }
 
