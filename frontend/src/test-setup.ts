@@ -6,3 +6,11 @@ afterEach(() => {
   cleanup();
   globalThis.localStorage?.clear();
 });
+
+// jsdom has dialogs but no modal ones.
+HTMLDialogElement.prototype.showModal ??= function showModal(this: HTMLDialogElement) {
+  this.open = true;
+};
+HTMLDialogElement.prototype.close ??= function close(this: HTMLDialogElement) {
+  this.open = false;
+};

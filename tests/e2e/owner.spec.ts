@@ -12,7 +12,8 @@ test('an owner finds a misspelled boat, reads its sheet and sees what the motor 
   await finding.click();
 
   await expect(page.getByRole('heading', { level: 1, name: /Reedcutter 14/ })).toBeVisible();
-  await expect(page.getByText('measured').first()).toBeVisible();
+  await expect(page.getByRole('heading', { level: 2, name: 'Running trim' })).toBeVisible();
+  await expect(page.getByRole('img', { name: /6 measured points/ })).toBeVisible();
   await expectSoundPage(page);
   await page.getByRole('link', { name: 'Check a fit' }).last().click();
 
@@ -45,6 +46,7 @@ test('keys alone: from the field through the findings to the boat', async ({ pag
   await page.goto('/');
   await page.getByRole('searchbox').focus();
   await page.keyboard.type('copperplat');
+  await expect(page.getByText('One boat found')).toBeAttached();
   await expect(page.getByRole('link', { name: /Copperplate 670/ })).toBeVisible();
   await page.keyboard.press('ArrowDown');
   await page.keyboard.press('Enter');

@@ -1,5 +1,4 @@
-import { Dialog as Radix } from 'radix-ui';
-import type { ReactNode } from 'react';
+import { type ReactNode, useId, useLayoutEffect, useRef } from 'react';
 
 interface DialogProps {
   open: boolean;
@@ -12,21 +11,49 @@ interface DialogProps {
   actions: ReactNode;
 }
 
-/** A sheet laid over the page; Escape and the ground close it, the focus returns to where it was. */
+/**
+ * A sheet laid over the page; Escape and the ground close it, the focus stays inside and returns to where it was.
+ * The browser's own modal dialog: it needs no style of its own in the page, which the content policy would refuse.
+ */
 export function Dialog({ open, onOpenChange, title, description, children, actions }: DialogProps) {
+  const sheet = useRef<HTMLDialogElement>(null);
+  const id = useId();
+
+  // In the layout phase, so that closing still finds the sheet in the page and gives the focus back.
+  useLayoutEffect(() => {
+    const dialog = sheet.current;
+    if (!open || !dialog) return;
+    dialog.showModal();
+    return () => dialog.close();
+  }, [open]);
+
+  if (!open) return null;
   return (
-    <Radix.Root open={open} onOpenChange={onOpenChange}>
-      <Radix.Portal>
-        <Radix.Overlay className="fixed inset-0 z-20 bg-ink/60" />
-        <Radix.Content className="fixed top-1/2 left-1/2 z-20 flex max-h-[90dvh] w-[min(36rem,calc(100vw-2rem))] -translate-x-1/2 -translate-y-1/2 flex-col gap-4 overflow-y-auto border border-ink bg-sheet p-4 text-ink tablet:p-6">
-          <Radix.Title className="text-title">{title}</Radix.Title>
-          <Radix.Description asChild>
-            <div className="text-ink-2">{description}</div>
-          </Radix.Description>
-          {children}
-          <div className="flex flex-wrap justify-end gap-3">{actions}</div>
-        </Radix.Content>
-      </Radix.Portal>
-    </Radix.Root>
+    // biome-ignore lint/a11y/useKeyWithClickEvents: Escape does by key what a click on the ground does
+    <dialog
+      ref={sheet}
+      aria-labelledby={`${id}-title`}
+      aria-describedby={`${id}-about`}
+      onCancel={(event) => {
+        event.preventDefault();
+        onOpenChange(false);
+      }}
+      onClick={(event) => {
+        // A click on the ground is one on the dialog itself; one inside is on something in it.
+        if (event.target === sheet.current) onOpenChange(false);
+      }}
+      className="m-auto w-[min(36rem,calc(100vw-2rem))] max-w-none border border-ink bg-sheet p-0 text-ink backdrop:bg-[rgb(0_0_0/0.6)]"
+    >
+      <div className="flex flex-col gap-4 p-4 tablet:p-6">
+        <h2 id={`${id}-title`} className="text-title">
+          {title}
+        </h2>
+        <div id={`${id}-about`} className="text-ink-2">
+          {description}
+        </div>
+        {children}
+        <div className="flex flex-wrap justify-end gap-3">{actions}</div>
+      </div>
+    </dialog>
   );
 }
