@@ -2,6 +2,7 @@ import type { CatalogTable } from '@tiltwright/shared/schemas/catalog-record.ts'
 import { and, asc, desc, eq, gte, inArray, isNull, lte, or, type SQL, sql } from 'drizzle-orm';
 import type { Db } from '../../db/connect.ts';
 import { editions, hulls, makers, revisions, trimPoints } from '../../db/schema/catalog.ts';
+import { firstChanges } from '../editions/first-changes.ts';
 import { type CatalogRow, kinds } from './kinds.ts';
 
 export interface ListFilter {
@@ -79,7 +80,13 @@ export const listTrimPoints = (db: Db, hullId: string) =>
 
 /** A record's history, newest first. */
 export const listRevisions = (db: Db, recordId: string) =>
-  db.select().from(revisions).where(eq(revisions.recordId, recordId)).orderBy(desc(revisions.revision)).all();
+  db
+    .select()
+    .from(revisions)
+    .where(eq(revisions.recordId, recordId))
+    .orderBy(desc(revisions.revision))
+    .all()
+    .map((row) => (row.before === null ? { ...row, changes: firstChanges(row.after) } : row));
 
 export const listMakers = (db: Db) => db.select({ name: makers.name }).from(makers).orderBy(asc(makers.name)).all();
 export const listEditions = (db: Db, limit: number, after: number) =>

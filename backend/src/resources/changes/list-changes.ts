@@ -6,6 +6,7 @@ import * as z from 'zod';
 import type { Db } from '../../db/connect.ts';
 import { ApiProblem } from '../../errors.ts';
 import { currentEdition } from '../catalog/queries.ts';
+import { firstChanges } from '../editions/first-changes.ts';
 
 type Position = [edition: number, recordId: string, revision: number];
 
@@ -28,14 +29,18 @@ export function listChanges(db: Db, after: string, limit: number): ChangePage {
   const from = read(after);
   const rows = db.$client
     .prepare(
-      `SELECT kind, record_id AS record, revision, edition, at, why, source, changes, "before" IS NULL AS isNew FROM revisions
+      `SELECT kind, record_id AS record, revision, edition, at, why, source, changes, "after", "before" IS NULL AS isNew FROM revisions
        WHERE (edition, record_id, revision) > (?, ?, ?) ORDER BY edition, record_id, revision LIMIT ?`,
     )
-    .all(...from, limit + 1) as (Omit<Change, 'changes' | 'isNew'> & { kind: Table; changes: string; isNew: 0 | 1 })[];
+    .all(...from, limit + 1) as (Omit<Change, 'changes' | 'isNew'> & { kind: Table; changes: string; after: string; isNew: 0 | 1 })[];
   const shown = rows.slice(0, limit);
   const last = shown.at(-1);
   return {
-    data: shown.map((row) => ({ ...row, isNew: row.isNew === 1, changes: JSON.parse(row.changes) as FieldChange[] })),
+    data: shown.map(({ changes, after: values, isNew, ...row }) => ({
+      ...row,
+      isNew: isNew === 1,
+      changes: isNew ? firstChanges(JSON.parse(values)) : (JSON.parse(changes) as FieldChange[]),
+    })),
     next: last ? write([last.edition, last.record, last.revision]) : after,
     more: rows.length > limit,
     edition: currentEdition(db),

@@ -4,6 +4,7 @@ import type { Table } from '@tiltwright/shared/schemas/catalog-record.ts';
 import type { RecordDifference } from '@tiltwright/shared/schemas/edition.ts';
 import type { FieldChange } from '@tiltwright/shared/schemas/import.ts';
 import type { Db } from '../../db/connect.ts';
+import { firstChanges } from './first-changes.ts';
 import { recordName } from './record-name.ts';
 
 interface Step {
@@ -20,13 +21,13 @@ export function compareEditions({ $client: sqlite }: Db, from: number, to: numbe
     .pluck()
     .all(from, to, limit + 1, after) as string[];
   const steps = sqlite.prepare(
-    'SELECT kind, record_id AS recordId, changes, "before" IS NULL AS isFirst FROM revisions WHERE record_id = ? AND edition > ? AND edition <= ? ORDER BY revision',
+    'SELECT kind, record_id AS recordId, changes, "after", "before" IS NULL AS isFirst FROM revisions WHERE record_id = ? AND edition > ? AND edition <= ? ORDER BY revision',
   );
   const nameOf = recordName(sqlite);
   return ids.map((id) => {
-    const rows = (steps.all(id, from, to) as (Omit<Step, 'changes'> & { changes: string })[]).map((row) => ({
+    const rows = (steps.all(id, from, to) as (Omit<Step, 'changes'> & { changes: string; after: string })[]).map((row) => ({
       ...row,
-      changes: JSON.parse(row.changes) as FieldChange[],
+      changes: row.isFirst ? firstChanges(JSON.parse(row.after)) : (JSON.parse(row.changes) as FieldChange[]),
     }));
     const kind = rows[0]!.kind;
     return { kind, id, name: nameOf(kind, id), isNew: rows[0]!.isFirst === 1, changes: netChanges(rows) };

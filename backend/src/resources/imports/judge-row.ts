@@ -14,6 +14,7 @@ export interface Judgement {
   write: RowWrite | null;
   errors: CellProblem[];
   cautions: CellProblem[];
+  /** Empty for a new record, whose changes are all its values. */
   changes: FieldChange[];
 }
 
@@ -61,7 +62,7 @@ export function settle(
 ): Judgement {
   const base = { name, recordId, rowKey, cautions: cautionsOf(reading), changes: merge.changes, write: merge.write };
   if (merge.conflicts.length > 0) return { ...base, fate: 'conflict', errors: merge.conflicts };
-  if (isNew) return { ...base, fate: 'new', errors: [] };
+  if (isNew) return { ...base, changes: [], fate: 'new', errors: [] };
   return { ...base, fate: merge.changes.length > 0 ? 'changed' : 'unchanged', errors: [] };
 }
 

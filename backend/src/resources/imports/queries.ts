@@ -4,6 +4,7 @@ import type { Db } from '../../db/connect.ts';
 import { importEdits } from '../../db/schema/import-work.ts';
 import { importRows, imports } from '../../db/schema/imports.ts';
 import { ApiProblem } from '../../errors.ts';
+import { firstChanges } from '../editions/first-changes.ts';
 
 export type ImportRecord = typeof imports.$inferSelect;
 export type ImportRowRecord = typeof importRows.$inferSelect;
@@ -105,8 +106,9 @@ export function toImportRows(db: Db, importId: string, header: readonly string[]
     .where(and(eq(importEdits.importId, importId), inArray(importEdits.n, numbers)))
     .all();
   const byRow = new Map(edits.map((edit) => [edit.n, edit]));
-  return rows.map(({ n, fate, name, recordId, errors, cautions, changes, cells }) => ({
-    ...{ n, fate, name, record: recordId, errors, cautions, changes },
+  return rows.map(({ n, fate, name, recordId, errors, cautions, changes, cells, write }) => ({
+    ...{ n, fate, name, record: recordId, errors, cautions },
+    changes: fate === 'new' && write ? firstChanges(write.values) : changes,
     cells: Object.fromEntries(header.map((column, index) => [column || `column ${index + 1}`, cells[index] ?? ''])),
     edits: byRow.get(n)?.cells ?? {},
     decision: byRow.get(n)?.decision ?? null,

@@ -147,12 +147,13 @@ test('progress comes as server-sent events that end with the check', async () =>
   expect(seen.at(-1)).toMatchObject({ status: 'checked', checkedRows: 3000, counts: { new: 3000 } });
 });
 
-function readText(response: NodeJS.ReadableStream, done: (error: Error | null, body: string) => void): void {
+function readText(response: unknown, done: (error: Error | null, body: string) => void): void {
+  const stream = response as NodeJS.ReadableStream;
   let text = '';
-  response.on('data', (piece) => {
+  stream.on('data', (piece) => {
     text += String(piece);
   });
-  response.on('end', () => done(null, text));
+  stream.on('end', () => done(null, text));
 }
 
 test.each(callers)('%s and review: stewards and admins only', async (caller) => {
