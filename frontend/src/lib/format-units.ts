@@ -2,11 +2,11 @@
 import type { UnitChoice } from './unit-choice.ts';
 
 /** Exact by definition (international yard and pound agreement of 1959; international nautical mile). */
-export const mmPerInch = 25.4;
+const mmPerInch = 25.4;
 const inchesPerFoot = 12;
-export const kmhPerKnot = 1.852;
-export const mphPerKnot = 1852 / 1609.344;
-export const poundsPerKg = 1 / 0.45359237;
+const kmhPerKnot = 1.852;
+const mphPerKnot = 1852 / 1609.344;
+const poundsPerKg = 1 / 0.45359237;
 
 /** What a number measures; its stored unit is in the name. */
 export type Quantity = 'lengthMm' | 'lengthM' | 'speedKn' | 'massKg' | 'angleDeg' | 'powerHp' | 'frequencyKhz' | 'levelDb' | 'plain';
@@ -56,7 +56,7 @@ function speedFactor(units: UnitChoice): number {
 }
 
 /** Decimals that a tape, a level or a log can tell apart. */
-export function decimalsOf(quantity: Quantity, units: UnitChoice): number {
+function decimalsOf(quantity: Quantity, units: UnitChoice): number {
   switch (quantity) {
     case 'lengthMm':
       return units.length === 'mm' ? 0 : 2;

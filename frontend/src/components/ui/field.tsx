@@ -1,7 +1,7 @@
 import { type ReactNode, useId } from 'react';
 
 /** What a control needs to belong to its field; spread it on the input. */
-export interface ControlProps {
+interface ControlProps {
   id: string;
   'aria-describedby'?: string | undefined;
   'aria-invalid'?: true | undefined;
@@ -46,33 +46,12 @@ export function Field({ label, help, where, error, optional, className = '', chi
   );
 }
 
-export function Where({ children }: { children: ReactNode }) {
+function Where({ children }: { children: ReactNode }) {
   return (
     <details className="text-note">
       <summary className="flex min-h-11 w-fit items-center text-ink-2 underline underline-offset-4">Where do I measure this?</summary>
       <div className="border-l border-rule pb-2 pl-3">{children}</div>
     </details>
-  );
-}
-
-/** A group of controls that answer one question. */
-export function FieldGroup({
-  legend,
-  help,
-  children,
-  className = '',
-}: {
-  legend: ReactNode;
-  help?: ReactNode;
-  children: ReactNode;
-  className?: string;
-}) {
-  return (
-    <fieldset className={`flex min-w-0 flex-col gap-3 ${className}`}>
-      <legend className="float-left w-full text-note">{legend}</legend>
-      {help && <p className="text-note text-ink-2">{help}</p>}
-      {children}
-    </fieldset>
   );
 }
 

@@ -1,7 +1,7 @@
 import type { ReactNode, Ref, SelectHTMLAttributes } from 'react';
 import { controlClass, Field, type FieldProps } from './field.tsx';
 
-export interface Choice<T extends string> {
+interface Choice<T extends string> {
   value: T;
   label: string;
 }

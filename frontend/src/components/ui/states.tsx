@@ -112,7 +112,7 @@ function IssueList({ error }: { error: unknown }) {
   );
 }
 
-export function messageOf(error: unknown): string {
+function messageOf(error: unknown): string {
   return error instanceof Error ? error.message : 'The reason is not known.';
 }
 

@@ -24,7 +24,7 @@ const features = tableFeatures({
  * Where a cell goes once the row is a short list on a narrow screen: at the head, at its right, under it in small print
  * with or without the heading before it, or at full size.
  */
-export type NarrowPlace = 'head' | 'side' | 'note' | 'labelled' | 'body';
+type NarrowPlace = 'head' | 'side' | 'note' | 'labelled' | 'body';
 /** `header` must be words: on a narrow screen it may stand before the cell. */
 export type TableColumn<T extends RowData> = ColumnDef<typeof features, T> & { header: string; narrow?: NarrowPlace };
 export type Sorting = SortingState;

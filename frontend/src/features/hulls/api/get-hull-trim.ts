@@ -1,11 +1,11 @@
 import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 
-export function getHullTrim({ hull, speedKn }: { hull: string; speedKn: number }, signal?: AbortSignal) {
+function getHullTrim({ hull, speedKn }: { hull: string; speedKn: number }, signal?: AbortSignal) {
   return bodyOf(api.GET('/hulls/{id}/trim', { params: { path: { id: hull }, query: { speedKn } }, signal }));
 }
 
-export const hullTrimQuery = (hull: string, speedKn: number | null) =>
+const hullTrimQuery = (hull: string, speedKn: number | null) =>
   queryOptions({
     queryKey: ['hulls', hull, 'trim', speedKn],
     queryFn: ({ signal }) => getHullTrim({ hull, speedKn: speedKn ?? 0 }, signal),

@@ -2,11 +2,11 @@ import { queryOptions, useQuery } from '@tanstack/react-query';
 import type { TrimPoint } from '@tiltwright/shared/schemas/trim-point.ts';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 
-export function listTrimPoints(hull: string, signal?: AbortSignal): Promise<{ data: TrimPoint[]; next: string | null }> {
+function listTrimPoints(hull: string, signal?: AbortSignal): Promise<{ data: TrimPoint[]; next: string | null }> {
   return bodyOf(api.GET('/hulls/{id}/trim-points', { params: { path: { id: hull } }, signal }));
 }
 
-export const trimPointsQuery = (hull: string) =>
+const trimPointsQuery = (hull: string) =>
   queryOptions({ queryKey: ['hulls', hull, 'trim-points'], queryFn: ({ signal }) => listTrimPoints(hull, signal) });
 
 /** The measured running angles of a hull. */

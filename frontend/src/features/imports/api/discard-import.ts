@@ -1,7 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 
-export function discardImport(id: string) {
+function discardImport(id: string) {
   return bodyOf(api.DELETE('/imports/{id}', { params: { path: { id } } }));
 }
 

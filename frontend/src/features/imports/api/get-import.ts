@@ -5,7 +5,7 @@ import { api, bodyOf } from '../../../lib/api-client.ts';
 /** How often to look while the server is at work on the table. */
 const lookAgainMs = 700;
 
-export function getImport(id: string, signal?: AbortSignal): Promise<Import> {
+function getImport(id: string, signal?: AbortSignal): Promise<Import> {
   return bodyOf(api.GET('/imports/{id}', { params: { path: { id } }, signal }));
 }
 

@@ -14,12 +14,12 @@ interface RowQuestion {
   cursor?: string | undefined;
 }
 
-export function listImportRows({ id, fate, cursor }: RowQuestion, signal?: AbortSignal): Promise<ImportRowList> {
+function listImportRows({ id, fate, cursor }: RowQuestion, signal?: AbortSignal): Promise<ImportRowList> {
   const query = { limit: 100, ...(fate && { fate }), ...(cursor && { cursor }) };
   return bodyOf(api.GET('/imports/{id}/rows', { params: { path: { id }, query }, signal }));
 }
 
-export const importRowsQuery = (id: string, fate: Fate | undefined, enabled: boolean) =>
+const importRowsQuery = (id: string, fate: Fate | undefined, enabled: boolean) =>
   infiniteQueryOptions({
     queryKey: ['imports', id, 'rows', fate ?? 'all'],
     queryFn: ({ signal, pageParam }) => listImportRows({ id, fate, cursor: pageParam }, signal),

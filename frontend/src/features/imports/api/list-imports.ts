@@ -2,11 +2,11 @@ import { queryOptions, useQuery } from '@tanstack/react-query';
 import type { Import } from '@tiltwright/shared/schemas/import.ts';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 
-export function listImports(signal?: AbortSignal): Promise<{ data: Import[]; next: string | null }> {
+function listImports(signal?: AbortSignal): Promise<{ data: Import[]; next: string | null }> {
   return bodyOf(api.GET('/imports', { params: { query: { limit: 50 } }, signal }));
 }
 
-export const importsQuery = queryOptions({ queryKey: ['imports'], queryFn: ({ signal }) => listImports(signal), staleTime: 0 });
+const importsQuery = queryOptions({ queryKey: ['imports'], queryFn: ({ signal }) => listImports(signal), staleTime: 0 });
 
 /** The latest uploads, newest first. */
 export function useImports() {

@@ -1,7 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 
-export function publishImport({ id, why }: { id: string; why: string }): Promise<{ edition: number }> {
+function publishImport({ id, why }: { id: string; why: string }): Promise<{ edition: number }> {
   return bodyOf(api.POST('/imports/{id}/publish', { params: { path: { id } }, body: { why, holdCautions: false } }));
 }
 

@@ -3,13 +3,13 @@ import type { Table } from '@tiltwright/shared/schemas/catalog-record.ts';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 import { checkImport } from './check-import.ts';
 
-export interface Upload {
+interface Upload {
   table: Table;
   file: File;
 }
 
 /** Sends the file and has its rows checked at once; gives the import's id. A check that does not start is told on the import's own page. */
-export async function uploadTable({ table, file }: Upload): Promise<string> {
+async function uploadTable({ table, file }: Upload): Promise<string> {
   const { id } = await bodyOf(
     api.POST('/imports', {
       // The document describes the file as a string of bytes; a form carries the file itself.

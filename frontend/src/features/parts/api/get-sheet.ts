@@ -14,7 +14,7 @@ export interface Sheets {
 }
 export type AnySheet = Sheets[CatalogTable];
 
-export function getSheet<T extends CatalogTable>(table: T, id: string, signal?: AbortSignal): Promise<Sheets[T]> {
+function getSheet<T extends CatalogTable>(table: T, id: string, signal?: AbortSignal): Promise<Sheets[T]> {
   return sheetOf(table, id, signal) as Promise<Sheets[T]>;
 }
 
@@ -34,7 +34,7 @@ function sheetOf(table: CatalogTable, id: string, signal?: AbortSignal): Promise
   }
 }
 
-export const sheetQuery = <T extends CatalogTable>(table: T, id: string) =>
+const sheetQuery = <T extends CatalogTable>(table: T, id: string) =>
   queryOptions({ queryKey: [table, id], queryFn: ({ signal }) => getSheet(table, id, signal) });
 
 /** One catalog record with where each of its values comes from. */

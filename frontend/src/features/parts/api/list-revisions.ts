@@ -10,7 +10,7 @@ export interface RevisionList {
   next: string | null;
 }
 
-export function listRevisions(table: CatalogTable, id: string, signal?: AbortSignal): Promise<RevisionList> {
+function listRevisions(table: CatalogTable, id: string, signal?: AbortSignal): Promise<RevisionList> {
   const init = { params: { path: { id } }, signal };
   switch (table) {
     case 'hulls':
@@ -26,7 +26,7 @@ export function listRevisions(table: CatalogTable, id: string, signal?: AbortSig
   }
 }
 
-export const revisionsQuery = (table: CatalogTable, id: string) =>
+const revisionsQuery = (table: CatalogTable, id: string) =>
   queryOptions({ queryKey: [table, id, 'revisions'], queryFn: ({ signal }) => listRevisions(table, id, signal) });
 
 /** What changed in a record, and when. */

@@ -2,14 +2,11 @@ import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query'
 import type { Hull } from '@tiltwright/shared/schemas/hull.ts';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 
-export function searchHulls(
-  { q, limit }: { q: string; limit: number },
-  signal?: AbortSignal,
-): Promise<{ data: Hull[]; next: string | null }> {
+function searchHulls({ q, limit }: { q: string; limit: number }, signal?: AbortSignal): Promise<{ data: Hull[]; next: string | null }> {
   return bodyOf(api.GET('/hulls', { params: { query: { q, limit } }, signal }));
 }
 
-export const hullSearchQuery = (q: string, limit: number) =>
+const hullSearchQuery = (q: string, limit: number) =>
   queryOptions({
     queryKey: ['hulls', 'search', q, limit],
     queryFn: ({ signal }) => searchHulls({ q, limit }, signal),

@@ -2,11 +2,11 @@ import { queryOptions, useQuery } from '@tanstack/react-query';
 import type { SearchHit } from '@tiltwright/shared/schemas/edition.ts';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 
-export function searchParts(q: string, signal?: AbortSignal): Promise<{ data: SearchHit[]; next: string | null }> {
+function searchParts(q: string, signal?: AbortSignal): Promise<{ data: SearchHit[]; next: string | null }> {
   return bodyOf(api.GET('/search', { params: { query: { q, limit: 6 } }, signal }));
 }
 
-export const partSearchQuery = (q: string, enabled: boolean) =>
+const partSearchQuery = (q: string, enabled: boolean) =>
   queryOptions({
     queryKey: ['search', q],
     queryFn: ({ signal }) => searchParts(q, signal),

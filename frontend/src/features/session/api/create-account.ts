@@ -3,7 +3,7 @@ import type { Session, SignUp } from '@tiltwright/shared/schemas/account.ts';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 import { become } from './become.ts';
 
-export function createAccount(body: SignUp): Promise<Session> {
+function createAccount(body: SignUp): Promise<Session> {
   return bodyOf(api.POST('/accounts', { body }));
 }
 

@@ -2,7 +2,7 @@ import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 import { become } from './become.ts';
 
-export function endSession() {
+function endSession() {
   return bodyOf(api.DELETE('/session'));
 }
 

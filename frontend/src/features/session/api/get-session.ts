@@ -2,7 +2,7 @@ import { queryOptions, useQuery } from '@tanstack/react-query';
 import type { Role, Session } from '@tiltwright/shared/schemas/account.ts';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 
-export function getSession(signal?: AbortSignal): Promise<Session> {
+function getSession(signal?: AbortSignal): Promise<Session> {
   return bodyOf(api.GET('/session', { signal }));
 }
 

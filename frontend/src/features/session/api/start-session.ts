@@ -3,7 +3,7 @@ import type { Session, SignIn } from '@tiltwright/shared/schemas/account.ts';
 import { api, bodyOf } from '../../../lib/api-client.ts';
 import { become } from './become.ts';
 
-export function startSession(body: SignIn): Promise<Session> {
+function startSession(body: SignIn): Promise<Session> {
   return bodyOf(api.POST('/session', { body }));
 }
 
