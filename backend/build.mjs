@@ -4,7 +4,11 @@ import { build } from 'esbuild';
 
 const folder = import.meta.dirname;
 await build({
-  entryPoints: { server: path.join(folder, 'src/server.ts'), 'import-worker': path.join(folder, 'src/jobs/import-worker.ts') },
+  entryPoints: {
+    server: path.join(folder, 'src/server.ts'),
+    'import-worker': path.join(folder, 'src/jobs/import-worker.ts'),
+    'fit-worker': path.join(folder, 'src/fit-pool/fit-worker.ts'),
+  },
   outdir: path.join(folder, 'dist'),
   outExtension: { '.js': '.mjs' },
   bundle: true,

@@ -1,6 +1,7 @@
 // Every setting is read and checked here, once, at the start.
 import { randomBytes } from 'node:crypto';
 import { accessSync, constants, existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { availableParallelism } from 'node:os';
 import path from 'node:path';
 import * as z from 'zod';
 import { topFolder } from './paths.ts';
@@ -62,6 +63,13 @@ const Settings = z.object({
   LIMIT_ACCOUNT: limit(600).describe('Units a minute for an account.'),
   LIMIT_KEY: limit(6000).describe('Units a minute for an API key.'),
   LIMIT_KEY_DAY: limit(500_000).describe('Units a day for an API key.'),
+  FIT_THREADS: z.coerce
+    .number()
+    .int()
+    .min(0)
+    .max(64)
+    .default(Math.min(8, availableParallelism()))
+    .describe('Threads that work out fits; 0 does them in the one that answers requests.'),
   TRUST_PROXY: z.coerce.number().int().min(0).max(5).default(0).describe('How many proxies stand in front; 0 for none.'),
 });
 
@@ -87,6 +95,7 @@ export interface Config {
   keepMailDays: number;
   keepAuditYears: number;
   tidyHour: number;
+  fitThreads: number;
   /** Units a minute, and for keys also a day; what a kind of caller has until an admin says otherwise. */
   limits: { anonymous: number; page: number; account: number; key: number; keyDay: number };
 }
@@ -133,6 +142,7 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     keepMailDays: settings.KEEP_MAIL_DAYS,
     keepAuditYears: settings.KEEP_AUDIT_YEARS,
     tidyHour: settings.TIDY_HOUR,
+    fitThreads: settings.FIT_THREADS,
     limits: {
       anonymous: settings.LIMIT_ANONYMOUS,
       page: settings.LIMIT_PAGE,

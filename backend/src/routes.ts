@@ -1,17 +1,22 @@
 import type { Deps } from './deps.ts';
 import type { Route } from './http/operation.ts';
+import { batchRoutes } from './resources/batch/routes.ts';
 import { boatRoutes } from './resources/boats/routes.ts';
 import { catalogRoutes } from './resources/catalog/routes.ts';
 import { changeRoutes } from './resources/changes/routes.ts';
 import { editionRoutes } from './resources/editions/routes.ts';
 import { exportRoutes } from './resources/exports/routes.ts';
+import { fitRoutes } from './resources/fits/routes.ts';
 import { reviewRoutes } from './resources/imports/review-routes.ts';
 import { importRoutes } from './resources/imports/routes.ts';
 import { keyRoutes } from './resources/keys/routes.ts';
+import { levelRoutes } from './resources/levels/routes.ts';
 import { limitRoutes } from './resources/limits/routes.ts';
 import { questionRoutes } from './resources/questions/routes.ts';
+import { resolveRoutes } from './resources/resolve/routes.ts';
 import { searchRoutes } from './resources/search/routes.ts';
 import { sessionRoutes } from './resources/session/routes.ts';
+import { shareRoutes } from './resources/shares/routes.ts';
 import { usageRoutes } from './resources/usage/routes.ts';
 
 /** Everything the API can do. */
@@ -22,12 +27,17 @@ export function allRoutes(deps: Deps): Route[] {
     ...editionRoutes(deps),
     ...changeRoutes(deps),
     ...exportRoutes(deps),
+    ...resolveRoutes(deps),
     ...questionRoutes(deps),
+    ...batchRoutes(deps),
+    ...levelRoutes(),
     ...sessionRoutes(deps),
     ...keyRoutes(deps),
     ...usageRoutes(deps),
     ...limitRoutes(deps),
     ...boatRoutes(deps),
+    ...fitRoutes(deps),
+    ...shareRoutes(deps),
     ...importRoutes(deps),
     ...reviewRoutes(deps),
   ];

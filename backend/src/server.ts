@@ -10,6 +10,7 @@ import { connect, type Db, databaseFile } from './db/connect.ts';
 import { migrateDatabase } from './db/migrate.ts';
 import { demoAccounts, demoPassword, seedDemoWorld } from './db/seed.ts';
 import { createDeps } from './deps.ts';
+import { fitPool } from './fit-pool/fit-pool.ts';
 import type { ImportJobs } from './jobs/import-jobs.ts';
 import { inProcessJobs } from './jobs/in-process-jobs.ts';
 import { workerJobs } from './jobs/worker-jobs.ts';
@@ -26,7 +27,7 @@ async function start(): Promise<void> {
   const db = openDatabase(config);
   if (config.mode !== 'production') await seedDemoWorld(db, config, seedsFolder);
   const logger = pino({ level: config.logLevel });
-  const deps = createDeps(db, config, importJobs(db, config));
+  const deps = createDeps(db, config, { jobs: importJobs(db, config), pool: fitPool(config.fitThreads) });
   recoverImports(db, deps.jobs, (error) => logger.error({ err: error }, 'a check taken up again failed'));
   const flushing = setInterval(() => {
     if (!deps.jobs.isWriting()) deps.usage.flush();
@@ -36,6 +37,7 @@ async function start(): Promise<void> {
   stopOnSignal(server, async () => {
     clearInterval(flushing);
     await deps.jobs.close();
+    await deps.pool.close();
     deps.usage.flush();
     db.$client.close();
   });

@@ -51,3 +51,20 @@ export function page<T>(rows: T[], limit: number, place: Place): { data: T[]; ne
 
 export const listOf = <S extends z.ZodType>(row: S) =>
   z.strictObject({ data: z.array(row), next: z.string().nullable().describe('Cursor of the next page; null on the last.') });
+
+/** A page of a list in order of ids, which no edition moves: the cursor is the last id given. */
+export function pageById<T extends { id: string }>(rows: T[], limit: number): { data: T[]; next: string | null } {
+  const data = rows.slice(0, limit);
+  return { data, next: rows.length > limit ? Buffer.from(data.at(-1)!.id).toString('base64url') : null };
+}
+
+/** @throws ApiProblem invalid-input for a cursor that is none of ours */
+export function decodeIdCursor(cursor: string | undefined): string | undefined {
+  if (cursor === undefined) return undefined;
+  const id = Buffer.from(cursor, 'base64url').toString('utf8');
+  if (!/^\w{3,80}$/.test(id))
+    throw new ApiProblem('invalid-input', 'cursor: use `next` as it was given.', [
+      { path: 'cursor', code: 'invalid-cursor', message: 'Use `next` as it was given.' },
+    ]);
+  return id;
+}

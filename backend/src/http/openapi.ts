@@ -53,22 +53,26 @@ function describe(registry: OpenAPIRegistry, operation: Operation): void {
   const security: Record<string, string[]>[] = [...(openToAnyone(may) ? [{}] : []), { session: [] }, ...(scope ? [{ key: [] }] : [])];
   const content = body
     ? { 'application/json': { schema: body, ...(bodyExample !== undefined && { example: bodyExample }) } }
-    : multipart
-      ? { 'multipart/form-data': { schema: multipart } }
-      : undefined;
+    : operation.lines
+      ? { 'application/x-ndjson': { schema: operation.lines.schema } }
+      : multipart
+        ? { 'multipart/form-data': { schema: multipart } }
+        : undefined;
   registry.registerPath({
     operationId: id,
     method,
     path,
     tags: [tag],
     summary,
-    description: [description, describePermission(may), describeCost(operation)].filter(Boolean).join('\n\n'),
+    description: [description, describeLines(operation), describePermission(may), describeCost(operation)].filter(Boolean).join('\n\n'),
     security,
     request: {
       ...(params && { params }),
       ...(query && { query }),
       ...headerFields(operation),
-      ...(content && { body: { content, required: operation.multipart !== undefined || !acceptsNothing(operation) } }),
+      ...(content && {
+        body: { content, required: operation.multipart !== undefined || operation.lines !== undefined || !acceptsNothing(operation) },
+      }),
     },
     responses: {
       [reply.status]: {
@@ -80,6 +84,11 @@ function describe(registry: OpenAPIRegistry, operation: Operation): void {
       ...problemResponses(operation),
     },
   });
+}
+
+/** An example of many lines is no example of the line's schema. */
+function describeLines({ lines }: Operation): string | undefined {
+  return lines && `\`\`\`\n${lines.example}\n\`\`\``;
 }
 
 function describeCost(operation: Operation): string {

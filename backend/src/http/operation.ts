@@ -22,6 +22,8 @@ export interface Operation<P extends Fields = Fields, Q extends Fields = Fields,
   params?: P;
   query?: Q;
   body?: B;
+  /** Set where the body is NDJSON that the handler reads itself; the example is its text. */
+  lines?: { schema: z.ZodType; example: string };
   /** Set where the body is a form with a file. */
   multipart?: z.ZodObject;
   bodyExample?: unknown;

@@ -17,7 +17,7 @@ export function problemBody(problem: ApiProblem, req: Request): Problem {
 }
 
 /** What the packages in front of the routes throw, in our words. */
-function translate(error: unknown): ApiProblem {
+export function translate(error: unknown): ApiProblem {
   if (error instanceof ApiProblem) return error;
   if (error instanceof MulterError) {
     if (error.code === 'LIMIT_FILE_SIZE') return new ApiProblem('body-too-large', 'The file is larger than this site takes.');
@@ -64,5 +64,5 @@ export const problemHandler: ErrorRequestHandler = (error, req, res, next) => {
     .status(problem.status)
     .setHeader('Cache-Control', 'no-store')
     .type('application/problem+json')
-    .send(JSON.stringify(problemBody(problem, req)));
+    .end(JSON.stringify(problemBody(problem, req)));
 };

@@ -512,6 +512,30 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/hulls/resolve": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Match up to 1 000 names of a stock list to hulls
+         * @description Slips, joined and split words and the model year in the name are allowed for. Each candidate has a score and says why; `best` is set where one is good enough and well ahead of the next.
+         *
+         *     Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit, and 1 more for each further name.
+         */
+        post: operations["resolveHulls"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
     "/tilt": {
         parameters: {
             query?: never;
@@ -588,6 +612,84 @@ export interface paths {
          *     Costs 2 units, and 18 more with sampled uncertainty.
          */
         post: operations["askFit"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/placements": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Where on the transom it could go
+         * @description The best three distinct places and the whole map of offsets, drops and tilts; only among existing holes or along a board where these are given, and by least change where something is mounted already. An estimate, not an approval; not for navigation.
+         *
+         *     Anyone; a key needs the scope `fit:compute`.
+         *
+         *     Costs 100 units.
+         */
+        post: operations["askPlacements"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/fits/batch": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Many fits in one request, a line each
+         * @description NDJSON in and out, in order, up to 10000 lines, answered as they come. The first line may name parts once, `{ "shared": { "hulls": { "a": … } } }`; later lines call them `"#a"`. Each line gets its answer, or `{ line, problem }`; the last line is `{ "done": true, "count", "problems", "edition" }`, and without it the answer is not whole. Lines default to no sampled uncertainty. Two batches of one caller may run at a time.
+         *
+         *     ```
+         *     {"shared":{"hulls":{"skiff":{"form":"shallow-v","lengthM":4.2,"deadriseDeg":8,"transomAngleDeg":14,"transomHeightMm":400,"material":"aluminium","loadedMassKg":430}},"lowerUnits":{"thirty":{"drive":"outboard","powerHp":30,"shaftLengthMm":381}},"transducers":{"side":{"kinds":["side"],"housingLengthMm":220}}}}
+         *     {"ref":"job 1","hull":"#skiff","lowerUnits":[{"lowerUnit":"#thirty"}],"transducer":"#side","placement":{"offsetMm":380,"dropMm":5,"standoffMm":30},"running":{"speedKn":4,"water":"fresh"},"target":{"attitudeDeg":0}}
+         *     {"ref":"job 2","hull":"#skiff","lowerUnits":[{"lowerUnit":"#thirty","motorTrimDeg":6}],"transducer":"#side","placement":{"offsetMm":380,"dropMm":5,"standoffMm":30},"running":{"speedKn":4,"water":"fresh"},"target":{"attitudeDeg":0}}
+         *     ```
+         *
+         *     Whoever is signed in; a key needs the scope `fit:compute`.
+         *
+         *     Costs 1 unit, and 2 for each line, 20 for a sampled one.
+         */
+        post: operations["askFits"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/levels": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * The running angle from a level and shims, and the stack for an angle
+         * @description The angle of a run has its shim for sine and the level’s length for radius; of several runs the median counts, less what the level reads with the keel level.
+         *
+         *     Anyone; a key needs the scope `fit:compute`.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["askLevel"];
         delete?: never;
         options?: never;
         head?: never;
@@ -840,6 +942,188 @@ export interface paths {
          *     Costs 1 unit.
          */
         get: operations["listBoats"];
+        put?: never;
+        /**
+         * Keep a boat with its rig
+         * @description Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["createBoat"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/boats/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One of the account’s boats
+         * @description Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getBoat"];
+        put?: never;
+        post?: never;
+        /**
+         * Delete a boat; saved fits of it stay
+         * @description Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["deleteBoat"];
+        options?: never;
+        head?: never;
+        /**
+         * Change a boat
+         * @description What is left out stays. With If-Match a change made from a stale copy is refused.
+         *
+         *     Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        patch: operations["changeBoat"];
+        trace?: never;
+    };
+    "/me/fits": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * The account’s saved fits
+         * @description Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listFits"];
+        put?: never;
+        /**
+         * Ask a fit and keep it with its answer
+         * @description Engine version and edition are kept with the answer, so that it reads the same years later.
+         *
+         *     Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit, and 1 more where a question is asked, 19 where it is sampled.
+         */
+        post: operations["createFit"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/fits/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One saved fit
+         * @description Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getFit"];
+        put?: never;
+        post?: never;
+        /**
+         * Delete a saved fit and the links to it
+         * @description Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["deleteFit"];
+        options?: never;
+        head?: never;
+        /**
+         * Change a saved fit
+         * @description What is left out stays; a changed question is asked anew. With If-Match a change made from a stale copy is refused.
+         *
+         *     Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit, and 1 more where a question is asked, 19 where it is sampled.
+         */
+        patch: operations["changeFit"];
+        trace?: never;
+    };
+    "/me/shares": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Links to the account’s saved fits, newest first
+         * @description Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listShares"];
+        put?: never;
+        /**
+         * Make a link that opens one saved fit to whoever has it
+         * @description The link shows the fit as it stands when it is opened, without the note and without whose it is.
+         *
+         *     Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["createShare"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/shares/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        post?: never;
+        /**
+         * Withdraw a link at once
+         * @description Role customer; a key needs the scope `boats:write`.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["revokeShare"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/shares/{token}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * The saved fit behind a link
+         * @description Anyone; a key needs the scope `catalog:read`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getSharedFit"];
         put?: never;
         post?: never;
         delete?: never;
@@ -1927,6 +2211,47 @@ export interface components {
             isNew: boolean;
             changes: components["schemas"]["FieldChange"][];
         };
+        ResolveReply: {
+            data: components["schemas"]["ResolvedName"][];
+            edition: number;
+        };
+        ResolvedName: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            name: string;
+            /** @description Id of the one candidate that can be taken without asking; null where a person should look. */
+            best: string | null;
+            candidates: components["schemas"]["Candidate"][];
+        };
+        Candidate: {
+            id: string;
+            maker: string;
+            model: string;
+            package: string | null;
+            yearFrom: number | null;
+            yearTo: number | null;
+            /** @description 1 where every word and the year agree. */
+            score: number;
+            /** @description What agrees and what does not, in words. */
+            why: string[];
+        };
+        ResolveOrder: {
+            names: (string | components["schemas"]["NameToResolve"])[];
+            /**
+             * @description At most so many a name.
+             * @default 3
+             */
+            candidates: number;
+        };
+        NameToResolve: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            name: string;
+            /** @description Where it is known apart from the name. */
+            maker?: string;
+            /** @description Model year; one that stands in the name is found by itself. */
+            year?: number;
+        };
         TiltReply: {
             /** @description Echoed in the answer. */
             ref?: string;
@@ -2544,6 +2869,203 @@ export interface components {
             /** @enum {string} */
             rotation?: "right" | "left" | "dual";
         };
+        PlacementReply: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            best: {
+                offsetMm: number;
+                dropMm: number;
+                tiltDeg: number;
+                clearShare: {
+                    port: number;
+                    starboard: number;
+                };
+                bracketSettingDeg: number | null;
+                wedgeDeg: number | null;
+                /** @description Rules of the water flow that call for care here. */
+                flowCautions: string[];
+                /** @description How many of the four neighbouring tilts and offsets are clear too. */
+                tolerance: number;
+                /** @description Whether the wanted sides are clear here. */
+                passes: boolean;
+            }[];
+            map: {
+                offsetsMm: number[];
+                dropsMm: number[];
+                tiltsDeg: number[];
+                /** @description Clear share by place: offset slowest, tilt fastest. */
+                port: number[];
+                starboard: number[];
+            };
+            neededTiltDeg: number;
+            assumptions: components["schemas"]["Assumption"][];
+            cautions: components["schemas"]["CodedText"][];
+            engineVersion: string;
+            edition: number;
+        };
+        PlacementQuestion: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            hull: string | components["schemas"]["InlineHull"];
+            lowerUnits: components["schemas"]["FitEngine"][];
+            transducer: string | components["schemas"]["InlineTransducer"];
+            mount?: string | components["schemas"]["InlineMount"];
+            /** @default {} */
+            placement: {
+                /** @description Transom face (or board) to leading edge; the mount’s, else 25. */
+                standoffMm?: number;
+                /**
+                 * @description Thickness of a transom board; added to the standoff.
+                 * @default 0
+                 */
+                boardMm: number;
+                /** @description Bottom at the sensor below the keel line; needed on pontoons, catamarans and stepped hulls, where no vee tells it. */
+                localBottomMm?: number;
+                /** @default 0 */
+                rollDeg: number;
+                /** @default 0 */
+                yawDeg: number;
+            };
+            running: {
+                /** @description Through the water. */
+                speedKn: number;
+                loadedMassKg?: number;
+                /** @description The boat’s own running trim, measured at this speed. */
+                measuredTrimDeg?: number;
+                measuredSigmaDeg?: number;
+                /**
+                 * @default fresh
+                 * @enum {string}
+                 */
+                water: "fresh" | "sea";
+            };
+            obstacles?: components["schemas"]["FitObstacle"][];
+            /**
+             * @default both
+             * @enum {string}
+             */
+            wanted: "both" | "port" | "starboard";
+            target: {
+                attitudeDeg: number;
+            };
+            /** @description Only these places: holes that are there already. */
+            holes?: {
+                offsetMm: number;
+                /** @description Lower leading edge below the local bottom. */
+                dropMm: number;
+            }[];
+            /** @description Only along this board, from port to starboard. */
+            board?: {
+                fromOffsetMm: number;
+                toOffsetMm: number;
+            };
+            /** @description What is there now: less change ranks higher. */
+            mounted?: {
+                offsetMm: number;
+                /** @description Lower leading edge below the local bottom. */
+                dropMm: number;
+                tiltDeg: number;
+            };
+        };
+        BatchAnswerLine: components["schemas"]["FitAnswer"] | components["schemas"]["BatchProblem"] | components["schemas"]["BatchDone"];
+        BatchProblem: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            /** @description Line of the request, from 1. */
+            line: number;
+            problem: components["schemas"]["Problem"];
+        };
+        BatchDone: {
+            /** @enum {boolean} */
+            done: true;
+            /** @description Questions answered, well or with a problem. */
+            count: number;
+            problems: number;
+            edition: number;
+        };
+        BatchQuestionLine: components["schemas"]["SharedParts"] | components["schemas"]["FitQuestion"];
+        SharedParts: {
+            shared: {
+                /** @default {} */
+                hulls: {
+                    [key: string]: components["schemas"]["InlineHull"];
+                };
+                /** @default {} */
+                lowerUnits: {
+                    [key: string]: components["schemas"]["InlineLowerUnit"];
+                };
+                /** @default {} */
+                transducers: {
+                    [key: string]: components["schemas"]["InlineTransducer"];
+                };
+                /** @default {} */
+                mounts: {
+                    [key: string]: components["schemas"]["InlineMount"];
+                };
+            };
+        };
+        LevelReply: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            angle: {
+                /** @description Running angle, bow up positive. */
+                valueDeg: number;
+                sigmaDeg: number;
+                flags: string[];
+            } | null;
+            stack: {
+                /** @description Height that makes the level read the angle. */
+                shimMm: number;
+                /**
+                 * @description The end of the level it stands under.
+                 * @enum {string}
+                 */
+                under: "aft" | "forward";
+                stacks: {
+                    pieces: {
+                        id: string;
+                        count: number;
+                    }[];
+                    heightMm: number;
+                    errorMm: number;
+                    errorDeg: number;
+                }[];
+            } | null;
+            cautions: components["schemas"]["CodedText"][];
+            engineVersion: string;
+        };
+        LevelQuestion: {
+            /** @description Echoed in the answer. */
+            ref?: string;
+            readings?: {
+                runs: {
+                    /** @description Under the aft end where the bow is up; under the forward end it counts negative. */
+                    shimMm: number;
+                    /** @description Between the points the level stands on. */
+                    contactLengthMm: number;
+                }[];
+                /**
+                 * @description What the level reads with the keel level: soles slope.
+                 * @default 0
+                 */
+                trailerReadingDeg: number;
+                /**
+                 * @description Whether runs were made up and down wind or stream.
+                 * @default false
+                 */
+                bothDirections: boolean;
+            };
+            stackFor?: {
+                angleDeg: number;
+                /** @description Between the points the level stands on. */
+                contactLengthMm: number;
+                /**
+                 * @default none
+                 * @enum {string}
+                 */
+                coins: "none" | "us" | "euro";
+            };
+        };
         Session: {
             /** @description Null for a visitor. */
             account: {
@@ -2719,8 +3241,203 @@ export interface components {
             id: string;
             name: string;
             story: string | null;
+            /** @description Id of the catalog’s hull; null for one that is not listed. */
             hull: string | null;
             question: components["schemas"]["FitQuestion"];
+            revision: number;
+            /** Format: date-time */
+            createdAt: string;
+            /** Format: date-time */
+            updatedAt: string;
+        };
+        NewBoat: {
+            name: string;
+            /** @default null */
+            story: string | null;
+            /** @description The rig, as the question it asks. */
+            question: {
+                /** @description Echoed in the answer. */
+                ref?: string;
+                hull: string | components["schemas"]["InlineHull"];
+                lowerUnits: components["schemas"]["FitEngine"][];
+                transducer: string | components["schemas"]["InlineTransducer"];
+                mount?: string | components["schemas"]["InlineMount"];
+                placement: {
+                    /** @description Of the sensor off the centreline, starboard positive. */
+                    offsetMm: number;
+                    /** @description Lower leading edge below the local bottom. */
+                    dropMm: number;
+                    /** @description Transom face (or board) to leading edge; the mount’s, else 25. */
+                    standoffMm?: number;
+                    /**
+                     * @description Thickness of a transom board; added to the standoff.
+                     * @default 0
+                     */
+                    boardMm: number;
+                    /** @description Ahead of the transom; for through-hull, in-hull, pole and bow mounts. */
+                    forwardMm?: number;
+                    /** @description Bottom at the sensor below the keel line; needed on pontoons, catamarans and stepped hulls, where no vee tells it. */
+                    localBottomMm?: number;
+                    /** @default 0 */
+                    rollDeg: number;
+                    /** @default 0 */
+                    yawDeg: number;
+                    /** @description Set tilt against the keel line, nose-up positive; left out, the needed one. */
+                    tiltDeg?: number;
+                    /** @description Set tilt on the bracket’s own scale, in place of tiltDeg. */
+                    bracketSettingDeg?: number;
+                };
+                running: {
+                    /** @description Through the water. */
+                    speedKn: number;
+                    loadedMassKg?: number;
+                    /** @description The boat’s own running trim, measured at this speed. */
+                    measuredTrimDeg?: number;
+                    measuredSigmaDeg?: number;
+                    /**
+                     * @default fresh
+                     * @enum {string}
+                     */
+                    water: "fresh" | "sea";
+                };
+                alsoAt?: {
+                    label: string;
+                    speedKn: number;
+                    motorTrimDeg?: number;
+                }[];
+                obstacles?: components["schemas"]["FitObstacle"][];
+                /**
+                 * @default both
+                 * @enum {string}
+                 */
+                wanted: "both" | "port" | "starboard";
+                target: {
+                    attitudeDeg: number;
+                };
+                /**
+                 * @description Single questions default to sampled, batch lines to none.
+                 * @enum {string}
+                 */
+                uncertainty?: "sampled" | "none";
+            };
+        };
+        BoatChange: {
+            name?: string;
+            story?: string | null;
+            question?: components["schemas"]["FitQuestion"];
+        };
+        SavedFit: {
+            id: string;
+            name: string;
+            note: string | null;
+            /** @description Id of the boat it belongs to. */
+            boat: string | null;
+            question: components["schemas"]["FitQuestion"];
+            answer: components["schemas"]["FitAnswer"];
+            revision: number;
+            /** Format: date-time */
+            createdAt: string;
+            /** Format: date-time */
+            updatedAt: string;
+        };
+        NewFit: {
+            name: string;
+            /** @default null */
+            note: string | null;
+            /** @default null */
+            boat: string | null;
+            question: components["schemas"]["FitQuestion"];
+        };
+        FitChange: {
+            name?: string;
+            note?: string | null;
+            boat?: string | null;
+            /** @description Asked anew; the answer is replaced. */
+            question?: {
+                /** @description Echoed in the answer. */
+                ref?: string;
+                hull: string | components["schemas"]["InlineHull"];
+                lowerUnits: components["schemas"]["FitEngine"][];
+                transducer: string | components["schemas"]["InlineTransducer"];
+                mount?: string | components["schemas"]["InlineMount"];
+                placement: {
+                    /** @description Of the sensor off the centreline, starboard positive. */
+                    offsetMm: number;
+                    /** @description Lower leading edge below the local bottom. */
+                    dropMm: number;
+                    /** @description Transom face (or board) to leading edge; the mount’s, else 25. */
+                    standoffMm?: number;
+                    /**
+                     * @description Thickness of a transom board; added to the standoff.
+                     * @default 0
+                     */
+                    boardMm: number;
+                    /** @description Ahead of the transom; for through-hull, in-hull, pole and bow mounts. */
+                    forwardMm?: number;
+                    /** @description Bottom at the sensor below the keel line; needed on pontoons, catamarans and stepped hulls, where no vee tells it. */
+                    localBottomMm?: number;
+                    /** @default 0 */
+                    rollDeg: number;
+                    /** @default 0 */
+                    yawDeg: number;
+                    /** @description Set tilt against the keel line, nose-up positive; left out, the needed one. */
+                    tiltDeg?: number;
+                    /** @description Set tilt on the bracket’s own scale, in place of tiltDeg. */
+                    bracketSettingDeg?: number;
+                };
+                running: {
+                    /** @description Through the water. */
+                    speedKn: number;
+                    loadedMassKg?: number;
+                    /** @description The boat’s own running trim, measured at this speed. */
+                    measuredTrimDeg?: number;
+                    measuredSigmaDeg?: number;
+                    /**
+                     * @default fresh
+                     * @enum {string}
+                     */
+                    water: "fresh" | "sea";
+                };
+                alsoAt?: {
+                    label: string;
+                    speedKn: number;
+                    motorTrimDeg?: number;
+                }[];
+                obstacles?: components["schemas"]["FitObstacle"][];
+                /**
+                 * @default both
+                 * @enum {string}
+                 */
+                wanted: "both" | "port" | "starboard";
+                target: {
+                    attitudeDeg: number;
+                };
+                /**
+                 * @description Single questions default to sampled, batch lines to none.
+                 * @enum {string}
+                 */
+                uncertainty?: "sampled" | "none";
+            };
+        };
+        Share: {
+            id: string;
+            fit: string;
+            /** @description GET /shares/{token} answers to it. */
+            token: string;
+            /** Format: date-time */
+            createdAt: string;
+            /** Format: date-time */
+            revokedAt: string | null;
+        };
+        NewShare: {
+            fit: string;
+        };
+        SharedFit: {
+            name: string;
+            question: components["schemas"]["FitQuestion"];
+            answer: components["schemas"]["FitAnswer"];
+            /** Format: date-time */
+            updatedAt: string;
         };
         CreatedImport: {
             id: string;
@@ -5267,6 +5984,120 @@ export interface operations {
             };
         };
     };
+    resolveHulls: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "names": [
+                 *         "2018 Withyholm Reedcutter 14",
+                 *         {
+                 *           "ref": "stock 7",
+                 *           "name": "heddle14",
+                 *           "maker": "Ostrel"
+                 *         }
+                 *       ]
+                 *     }
+                 */
+                "application/json": components["schemas"]["ResolveOrder"];
+            };
+        };
+        responses: {
+            /** @description The names in their order. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["ResolveReply"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
     getTilt: {
         parameters: {
             query: {
@@ -5880,6 +6711,369 @@ export interface operations {
                 };
             };
             /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    askPlacements: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "hull": {
+                 *         "form": "shallow-v",
+                 *         "lengthM": 4.2,
+                 *         "deadriseDeg": 8,
+                 *         "transomAngleDeg": 14,
+                 *         "transomHeightMm": 400,
+                 *         "material": "aluminium",
+                 *         "loadedMassKg": 430
+                 *       },
+                 *       "lowerUnits": [
+                 *         {
+                 *           "lowerUnit": {
+                 *             "drive": "outboard",
+                 *             "powerHp": 30,
+                 *             "shaftLengthMm": 381
+                 *           },
+                 *           "motorTrimDeg": 0
+                 *         }
+                 *       ],
+                 *       "transducer": {
+                 *         "kinds": [
+                 *           "side"
+                 *         ],
+                 *         "housingLengthMm": 220
+                 *       },
+                 *       "running": {
+                 *         "speedKn": 4,
+                 *         "water": "fresh"
+                 *       },
+                 *       "target": {
+                 *         "attitudeDeg": 0
+                 *       },
+                 *       "placement": {
+                 *         "standoffMm": 30
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["PlacementQuestion"];
+            };
+        };
+        responses: {
+            /** @description The places. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["PlacementReply"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    askFits: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                "application/x-ndjson": components["schemas"]["BatchQuestionLine"];
+            };
+        };
+        responses: {
+            /** @description A line a question. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/x-ndjson": components["schemas"]["BatchAnswerLine"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    askLevel: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "readings": {
+                 *         "runs": [
+                 *           {
+                 *             "shimMm": 42,
+                 *             "contactLengthMm": 600
+                 *           },
+                 *           {
+                 *             "shimMm": 45,
+                 *             "contactLengthMm": 600
+                 *           },
+                 *           {
+                 *             "shimMm": 43,
+                 *             "contactLengthMm": 600
+                 *           }
+                 *         ],
+                 *         "trailerReadingDeg": 0.4,
+                 *         "bothDirections": true
+                 *       },
+                 *       "stackFor": {
+                 *         "angleDeg": 4,
+                 *         "contactLengthMm": 600,
+                 *         "coins": "euro"
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["LevelQuestion"];
+            };
+        };
+        responses: {
+            /** @description The angle and the stacks. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["LevelReply"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
             422: {
                 headers: {
                     [name: string]: unknown;
@@ -7091,14 +8285,19 @@ export interface operations {
     };
     listBoats: {
         parameters: {
-            query?: never;
+            query?: {
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
             header?: never;
             path?: never;
             cookie?: never;
         };
         requestBody?: never;
         responses: {
-            /** @description The boats. */
+            /** @description A page of boats, oldest first. */
             200: {
                 headers: {
                     /** @description The caller’s own, or one of ours. */
@@ -7137,6 +8336,1568 @@ export interface operations {
             };
             /** @description `not-allowed`: This role may not do that. */
             403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    createBoat: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description A mark of the caller’s own: the same creation sent again under it within a day happens once. */
+                "Idempotency-Key"?: string;
+                /** @description ETag it was changed from; 412 where it has changed since. */
+                "If-Match"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "name": "The skiff",
+                 *       "question": {
+                 *         "ref": "job 12",
+                 *         "hull": {
+                 *           "form": "shallow-v",
+                 *           "lengthM": 4.2,
+                 *           "deadriseDeg": 8,
+                 *           "transomAngleDeg": 14,
+                 *           "transomHeightMm": 400,
+                 *           "material": "aluminium",
+                 *           "loadedMassKg": 430
+                 *         },
+                 *         "lowerUnits": [
+                 *           {
+                 *             "lowerUnit": {
+                 *               "drive": "outboard",
+                 *               "powerHp": 30,
+                 *               "shaftLengthMm": 381
+                 *             },
+                 *             "motorTrimDeg": 0
+                 *           }
+                 *         ],
+                 *         "transducer": {
+                 *           "kinds": [
+                 *             "side"
+                 *           ],
+                 *           "housingLengthMm": 220
+                 *         },
+                 *         "placement": {
+                 *           "offsetMm": 380,
+                 *           "dropMm": 5,
+                 *           "standoffMm": 30
+                 *         },
+                 *         "running": {
+                 *           "speedKn": 4,
+                 *           "water": "fresh"
+                 *         },
+                 *         "alsoAt": [
+                 *           {
+                 *             "label": "cruising",
+                 *             "speedKn": 18
+                 *           }
+                 *         ],
+                 *         "target": {
+                 *           "attitudeDeg": 0
+                 *         }
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["NewBoat"];
+            };
+        };
+        responses: {
+            /** @description The boat. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Boat"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `idempotency-at-work`: The first request is still at work. `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-revision`: It has changed meanwhile. */
+            412: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `idempotency-mismatch`: The Idempotency-Key stood for another request. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getBoat: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The boat. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Boat"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    deleteBoat: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag it was changed from; 412 where it has changed since. */
+                "If-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description It is gone. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-revision`: It has changed meanwhile. */
+            412: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    changeBoat: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag it was changed from; 412 where it has changed since. */
+                "If-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "name": "The old skiff"
+                 *     }
+                 */
+                "application/json": components["schemas"]["BoatChange"];
+            };
+        };
+        responses: {
+            /** @description The boat as it is now. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Boat"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-revision`: It has changed meanwhile. */
+            412: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listFits: {
+        parameters: {
+            query?: {
+                /** @description Only those of one boat. */
+                boat?: string;
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of fits, oldest first. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["SavedFit"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    createFit: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description A mark of the caller’s own: the same creation sent again under it within a day happens once. */
+                "Idempotency-Key"?: string;
+                /** @description ETag it was changed from; 412 where it has changed since. */
+                "If-Match"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "name": "Port side, on a board",
+                 *       "question": {
+                 *         "ref": "job 12",
+                 *         "hull": {
+                 *           "form": "shallow-v",
+                 *           "lengthM": 4.2,
+                 *           "deadriseDeg": 8,
+                 *           "transomAngleDeg": 14,
+                 *           "transomHeightMm": 400,
+                 *           "material": "aluminium",
+                 *           "loadedMassKg": 430
+                 *         },
+                 *         "lowerUnits": [
+                 *           {
+                 *             "lowerUnit": {
+                 *               "drive": "outboard",
+                 *               "powerHp": 30,
+                 *               "shaftLengthMm": 381
+                 *             },
+                 *             "motorTrimDeg": 0
+                 *           }
+                 *         ],
+                 *         "transducer": {
+                 *           "kinds": [
+                 *             "side"
+                 *           ],
+                 *           "housingLengthMm": 220
+                 *         },
+                 *         "placement": {
+                 *           "offsetMm": 380,
+                 *           "dropMm": 5,
+                 *           "standoffMm": 30
+                 *         },
+                 *         "running": {
+                 *           "speedKn": 4,
+                 *           "water": "fresh"
+                 *         },
+                 *         "alsoAt": [
+                 *           {
+                 *             "label": "cruising",
+                 *             "speedKn": 18
+                 *           }
+                 *         ],
+                 *         "target": {
+                 *           "attitudeDeg": 0
+                 *         }
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["NewFit"];
+            };
+        };
+        responses: {
+            /** @description The saved fit. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["SavedFit"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `idempotency-at-work`: The first request is still at work. `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-revision`: It has changed meanwhile. */
+            412: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `idempotency-mismatch`: The Idempotency-Key stood for another request. `unknown-part`: A catalog id is not known. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getFit: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The saved fit. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["SavedFit"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    deleteFit: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag it was changed from; 412 where it has changed since. */
+                "If-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description It is gone. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-revision`: It has changed meanwhile. */
+            412: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    changeFit: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag it was changed from; 412 where it has changed since. */
+                "If-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "note": "Tried on Saturday."
+                 *     }
+                 */
+                "application/json": components["schemas"]["FitChange"];
+            };
+        };
+        responses: {
+            /** @description The fit as it is now. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["SavedFit"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-revision`: It has changed meanwhile. */
+            412: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `unknown-part`: A catalog id is not known. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listShares: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The links, the last thousand. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Share"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    createShare: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description A mark of the caller’s own: the same creation sent again under it within a day happens once. */
+                "Idempotency-Key"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "fit": "fit_01K0000000000000000000000"
+                 *     }
+                 */
+                "application/json": components["schemas"]["NewShare"];
+            };
+        };
+        responses: {
+            /** @description The link. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Share"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `idempotency-at-work`: The first request is still at work. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `idempotency-mismatch`: The Idempotency-Key stood for another request. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    revokeShare: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description It opens nothing any more. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getSharedFit: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                token: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The fit. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["SharedFit"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
                 headers: {
                     [name: string]: unknown;
                 };

@@ -1,10 +1,16 @@
-import { Boat } from '@tiltwright/shared/schemas/boat.ts';
-import { asc, eq } from 'drizzle-orm';
+import { Boat, BoatChange, NewBoat } from '@tiltwright/shared/schemas/boat.ts';
+import * as z from 'zod';
 import { actorId } from '../../auth/actor.ts';
-import { boats } from '../../db/schema/people.ts';
 import type { Deps } from '../../deps.ts';
-import { listOf } from '../../http/cursor.ts';
-import { noStore, type Route, route } from '../../http/operation.ts';
+import { decodeIdCursor, listOf, pageById, pageFields } from '../../http/cursor.ts';
+import { answeredFromCache, demandMatch } from '../../http/etag.ts';
+import { noStore, type Route, revalidate, route } from '../../http/operation.ts';
+import { fitExample } from '../questions/examples.ts';
+import { boatOrProblem, boatTag, changeBoat, createBoat, listBoats, removeBoat, toBoat } from './queries.ts';
+
+const tag = 'Boats';
+const may = 'boats.own';
+const boatParams = z.strictObject({ id: z.string().min(1).max(80) });
 
 export function boatRoutes({ db }: Deps): Route[] {
   return [
@@ -13,21 +19,96 @@ export function boatRoutes({ db }: Deps): Route[] {
         id: 'listBoats',
         method: 'get',
         path: '/me/boats',
-        tag: 'Boats',
+        tag,
         summary: 'The account’s boats, each as the question its rig asks',
-        may: 'boats.own',
-        reply: { status: 200, description: 'The boats.', schema: listOf(Boat) },
+        may,
+        query: z.strictObject(pageFields),
+        reply: { status: 200, description: 'A page of boats, oldest first.', schema: listOf(Boat) },
         cache: noStore,
       },
-      ({ actor }) => {
-        const rows = db
-          .select()
-          .from(boats)
-          .where(eq(boats.userId, actorId(actor)))
-          .orderBy(asc(boats.id))
-          .all();
-        return { data: rows.map(({ id, name, story, hullId, question }) => ({ id, name, story, hull: hullId, question })), next: null };
+      ({ actor, query }) => {
+        const rows = listBoats(db, actorId(actor), query.limit + 1, decodeIdCursor(query.cursor));
+        return pageById(rows.map(toBoat), query.limit);
       },
+    ),
+    route(
+      {
+        id: 'createBoat',
+        method: 'post',
+        path: '/me/boats',
+        tag,
+        summary: 'Keep a boat with its rig',
+        may,
+        body: NewBoat,
+        bodyExample: { name: 'The skiff', question: fitExample },
+        reply: { status: 201, description: 'The boat.', schema: Boat },
+        problems: ['wrong-state'],
+        etag: true,
+        cache: noStore,
+      },
+      ({ actor, body, res }) => {
+        const row = createBoat(db, actorId(actor), body);
+        res.setHeader('ETag', `"${boatTag(row)}"`);
+        return toBoat(row);
+      },
+    ),
+    route(
+      {
+        id: 'getBoat',
+        method: 'get',
+        path: '/me/boats/{id}',
+        tag,
+        summary: 'One of the account’s boats',
+        may,
+        params: boatParams,
+        reply: { status: 200, description: 'The boat.', schema: Boat },
+        problems: ['not-found'],
+        etag: true,
+        cache: `private, ${revalidate}`,
+      },
+      ({ actor, params, req, res }) => {
+        const row = boatOrProblem(db, actorId(actor), params.id);
+        return answeredFromCache(req, res, boatTag(row)) ? undefined : toBoat(row);
+      },
+    ),
+    route(
+      {
+        id: 'changeBoat',
+        method: 'patch',
+        path: '/me/boats/{id}',
+        tag,
+        summary: 'Change a boat',
+        description: 'What is left out stays. With If-Match a change made from a stale copy is refused.',
+        may,
+        params: boatParams,
+        body: BoatChange,
+        bodyExample: { name: 'The old skiff' },
+        reply: { status: 200, description: 'The boat as it is now.', schema: Boat },
+        problems: ['not-found'],
+        etag: true,
+        cache: noStore,
+      },
+      ({ actor, params, body, req, res }) => {
+        const row = changeBoat(db, actorId(actor), params.id, body, (before) => demandMatch(req, boatTag(before)));
+        res.setHeader('ETag', `"${boatTag(row)}"`);
+        return toBoat(row);
+      },
+    ),
+    route(
+      {
+        id: 'deleteBoat',
+        method: 'delete',
+        path: '/me/boats/{id}',
+        tag,
+        summary: 'Delete a boat; saved fits of it stay',
+        may,
+        params: boatParams,
+        reply: { status: 204, description: 'It is gone.' },
+        problems: ['not-found'],
+        etag: true,
+        cache: noStore,
+      },
+      ({ actor, params, req }) => removeBoat(db, actorId(actor), params.id, (row) => demandMatch(req, boatTag(row))),
     ),
   ];
 }

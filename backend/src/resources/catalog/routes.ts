@@ -158,7 +158,7 @@ function hullRoutes(deps: Deps): Route[] {
         byEdition: true,
         cache: revalidate,
       },
-      ({ params, query }) => answerHullTrim(deps, recordOrProblem(deps, 'hulls', params.id).id, query),
+      ({ params, query }) => answerHullTrim(deps.parts, recordOrProblem(deps, 'hulls', params.id).id, query),
     ),
   ];
 }

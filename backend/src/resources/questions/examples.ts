@@ -25,3 +25,6 @@ export const fitExample = {
   alsoAt: [{ label: 'cruising', speedKn: 18 }],
   target: { attitudeDeg: 0 },
 };
+
+const { ref: _ref, alsoAt: _alsoAt, placement: _placement, ...rig } = fitExample;
+export const placementsExample = { ...rig, placement: { standoffMm: 30 } };

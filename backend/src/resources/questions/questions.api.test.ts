@@ -1,10 +1,11 @@
 import { ClearanceReply } from '@tiltwright/shared/schemas/clearance.ts';
 import { FitAnswer } from '@tiltwright/shared/schemas/fit.ts';
+import { PlacementReply } from '@tiltwright/shared/schemas/placement.ts';
 import { TiltReply } from '@tiltwright/shared/schemas/tilt.ts';
 import { expect, test } from 'vitest';
 import { expectProblem, parsed, testApp } from '../../../../tests/support/test-app.ts';
 import { currentEdition } from '../catalog/queries.ts';
-import { clearanceExample, fitExample, tiltExample } from './examples.ts';
+import { clearanceExample, fitExample, placementsExample, tiltExample } from './examples.ts';
 
 async function catalogIds(agent: Awaited<ReturnType<ReturnType<typeof testApp>['as']>>) {
   const first = async (path: string) => (await agent.get(`/api/v1/${path}`).expect(200)).body.data[0].id as string;
@@ -115,4 +116,31 @@ test.each([
   const agent = await testApp().as('visitor');
   const problem = expectProblem(await agent.post('/api/v1/fits').send({ ...fitExample, ...wrong }), 'invalid-input');
   expect(problem.issues.map((issue) => issue.path)).toContain(path);
+});
+
+test('places on the transom: each of the best is as clear as the whole check finds it', async () => {
+  const agent = await testApp().as('visitor');
+  const question = { ...placementsExample, ref: 'shelf 3' };
+  const reply = parsed(PlacementReply, await agent.post('/api/v1/placements').send(question).expect(200));
+  expect(reply.ref).toBe('shelf 3');
+  expect(reply.best.length).toBeGreaterThan(0);
+  const [best] = reply.best;
+  const { alsoAt: _alsoAt, ...fit } = fitExample;
+  const placement = { ...placementsExample.placement, offsetMm: best!.offsetMm, dropMm: best!.dropMm, tiltDeg: best!.tiltDeg };
+  const check = parsed(
+    FitAnswer,
+    await agent
+      .post('/api/v1/fits')
+      .send({ ...fit, placement, uncertainty: 'none' })
+      .expect(200),
+  );
+  expect(best!.clearShare.starboard).toBeCloseTo(check.clearance.starboard!.clearShare, 2);
+  expect(best!.clearShare.port).toBeCloseTo(check.clearance.port!.clearShare, 2);
+});
+
+test('places are searched on a transom, for a side element', async () => {
+  const agent = await testApp().as('visitor');
+  const ask = (change: object) => agent.post('/api/v1/placements').send({ ...placementsExample, ...change });
+  expect(expectProblem(await ask({ mount: { kind: 'in-hull' } }), 'invalid-input').issues[0]!.path).toBe('/mount');
+  expect(expectProblem(await ask({ transducer: { kinds: ['down'] } }), 'invalid-input').issues[0]!.path).toBe('/transducer');
 });

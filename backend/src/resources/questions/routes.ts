@@ -1,17 +1,19 @@
 import { ClearanceQuestion, ClearanceReply, clearanceFields } from '@tiltwright/shared/schemas/clearance.ts';
 import { FitAnswer, FitQuestion, PartId, Ref } from '@tiltwright/shared/schemas/fit.ts';
+import { PlacementQuestion, PlacementReply } from '@tiltwright/shared/schemas/placement.ts';
 import { TiltQuestion, TiltReply, tiltFields } from '@tiltwright/shared/schemas/tilt.ts';
+import type { Response } from 'express';
 import * as z from 'zod';
 import type { Deps } from '../../deps.ts';
 import { noStore, type Route, revalidate, route } from '../../http/operation.ts';
-import { askClearance, askFit, askTilt } from './answer-questions.ts';
-import { clearanceExample, fitExample, tiltExample } from './examples.ts';
+import { askClearance, askTilt, fitJob, placementsJob } from './answer-questions.ts';
+import { clearanceExample, fitExample, placementsExample, tiltExample } from './examples.ts';
 
 const tag = 'Questions';
 const may = 'fit.compute';
 const problems = ['unknown-part'] as const;
 
-export function questionRoutes({ db }: Deps): Route[] {
+export function questionRoutes({ parts, pool }: Deps): Route[] {
   return [
     route(
       {
@@ -29,7 +31,7 @@ export function questionRoutes({ db }: Deps): Route[] {
         byEdition: true,
         cache: revalidate,
       },
-      ({ query }) => askTilt(db, query),
+      ({ query }) => askTilt(parts, query),
     ),
     route(
       {
@@ -45,7 +47,7 @@ export function questionRoutes({ db }: Deps): Route[] {
         problems,
         cache: noStore,
       },
-      ({ body }) => askTilt(db, body),
+      ({ body }) => askTilt(parts, body),
     ),
     route(
       {
@@ -68,7 +70,7 @@ export function questionRoutes({ db }: Deps): Route[] {
         byEdition: true,
         cache: revalidate,
       },
-      ({ query }) => askClearance(db, query),
+      ({ query }) => askClearance(parts, query),
     ),
     route(
       {
@@ -84,7 +86,7 @@ export function questionRoutes({ db }: Deps): Route[] {
         problems,
         cache: noStore,
       },
-      ({ body }) => askClearance(db, body),
+      ({ body }) => askClearance(parts, body),
     ),
     route(
       {
@@ -104,7 +106,31 @@ export function questionRoutes({ db }: Deps): Route[] {
         moreCost: { of: ({ body }) => (body.uncertainty === 'none' ? 0 : 18), words: '18 more with sampled uncertainty' },
         cache: noStore,
       },
-      ({ body }) => askFit(db, body),
+      async ({ body, res }) => sendText(res, await pool.answer([fitJob(parts, body)])),
+    ),
+    route(
+      {
+        id: 'askPlacements',
+        method: 'post',
+        path: '/placements',
+        tag,
+        summary: 'Where on the transom it could go',
+        description:
+          'The best three distinct places and the whole map of offsets, drops and tilts; only among existing holes or along a board where these are given, and by least change where something is mounted already. An estimate, not an approval; not for navigation.',
+        may,
+        body: PlacementQuestion,
+        bodyExample: placementsExample,
+        reply: { status: 200, description: 'The places.', schema: PlacementReply },
+        problems,
+        cost: 100,
+        cache: noStore,
+      },
+      async ({ body, res }) => sendText(res, await pool.answer([placementsJob(parts, body)])),
     ),
   ];
+}
+
+/** The pool answers in JSON already. */
+function sendText(res: Response, [text]: string[]): undefined {
+  res.type('json').send(text);
 }

@@ -24,7 +24,7 @@ export function searchRoutes({ db, search }: Deps): Route[] {
       ({ query }) => {
         const data = search.find(query.q, undefined, query.limit).flatMap(({ kind, id, corrected }) => {
           const row = findRecord(db, kind, id);
-          if (!row || row.status !== 'published') return [];
+          if (row?.status !== 'published') return [];
           const { maker, model, package: pack, yearFrom, yearTo, generic } = row;
           return [{ kind, id, maker, model, package: pack, yearFrom, yearTo, generic, corrected }];
         });

@@ -16,6 +16,8 @@ export interface Finding {
 export interface CatalogSearch {
   /** Best first, at most `limit`. */
   find(question: string, kind: CatalogTable | undefined, limit: number): Finding[];
+  /** Whether any record has a word that this begins, or that it may be a slip of. */
+  knows(word: string): boolean;
 }
 
 interface Entry {
@@ -27,6 +29,8 @@ interface Entry {
 /** Candidates that are looked at closely; more would only differ in how badly they match. */
 const mostCandidates = 300;
 const mostWords = 8;
+/** Words of a question that are looked at; a stock list's line may be long. */
+const mostTyped = 24;
 
 export function catalogSearch(db: Db): CatalogSearch {
   let vocabulary: Vocabulary | undefined;
@@ -38,19 +42,33 @@ export function catalogSearch(db: Db): CatalogSearch {
   const anyKind = query('');
   const oneKind = query('AND e.kind = ?');
 
+  const present = (): Vocabulary => {
+    const edition = currentEdition(db);
+    if (!vocabulary || vocabularyEdition !== edition) {
+      vocabulary = loadVocabulary(db);
+      vocabularyEdition = edition;
+    }
+    return vocabulary;
+  };
+
   return {
+    knows(word) {
+      const words = present();
+      return words.begins(word) || words.readings(word).length > 0;
+    },
     find(question, kind, limit) {
-      const edition = currentEdition(db);
-      if (!vocabulary || vocabularyEdition !== edition) {
-        vocabulary = loadVocabulary(db);
-        vocabularyEdition = edition;
-      }
-      const words = nameWords(question).slice(0, mostWords);
+      const known = present();
+      // A word that no record has in any spelling (a colour, a trailer) must not hide those that have the others.
+      const isKnown = (word: string, index: number, all: string[]) =>
+        known.begins(word) ||
+        known.readings(word).length > 0 ||
+        [all[index - 1], all[index + 1]].some((near, side) => near !== undefined && known.begins(side === 0 ? near + word : word + near));
+      const words = nameWords(question).slice(0, mostTyped).filter(isKnown).slice(0, mostWords);
       if (words.length === 0) return [];
       const run = (match: string) => (kind ? oneKind.all(match, kind) : anyKind.all(match)) as Entry[];
       const candidates = new Map<string, Entry>();
       for (const spelling of spellings(words)) {
-        const match = spelling.map((word) => alternatives(word, vocabulary!)).join(' AND ');
+        const match = spelling.map((word) => alternatives(word, known)).join(' AND ');
         for (const entry of run(match)) candidates.set(entry.recordId, entry);
       }
       // Nothing has all the words: one may be wrong altogether.
@@ -58,12 +76,12 @@ export function catalogSearch(db: Db): CatalogSearch {
         for (const left of words) {
           const match = words
             .filter((word) => word !== left)
-            .map((word) => alternatives(word, vocabulary!))
+            .map((word) => alternatives(word, known))
             .join(' AND ');
           if (match) for (const entry of run(match)) candidates.set(entry.recordId, entry);
         }
       }
-      return rank([...candidates.values()], words, vocabulary).slice(0, limit);
+      return rank([...candidates.values()], words, known).slice(0, limit);
     },
   };
 }

@@ -12,6 +12,8 @@ export interface Reading {
 export interface Vocabulary {
   /** Catalog words within two slips of a whole word, or whose beginning is within one slip of it; best first. */
   readings(word: string): Reading[];
+  /** Whether any word of the catalog begins with it. */
+  begins(word: string): boolean;
 }
 
 /** Beginnings shorter than this are within a slip of too much to be of use. */
@@ -36,7 +38,18 @@ export function loadVocabulary(db: Db): Vocabulary {
       }
     }
   }
+  const sorted = rows.map(({ term }) => term).sort();
   return {
+    begins(word) {
+      let low = 0;
+      let high = sorted.length;
+      while (low < high) {
+        const middle = (low + high) >> 1;
+        if (sorted[middle]! < word) low = middle + 1;
+        else high = middle;
+      }
+      return sorted[low]?.startsWith(word) ?? false;
+    },
     readings(word) {
       if (word.length < 3 || /^\p{N}+$/u.test(word)) return [];
       const found = new Map<string, number>();
