@@ -19,7 +19,7 @@ export function Dialog({ open, onOpenChange, title, description, children, actio
   const sheet = useRef<HTMLDialogElement>(null);
   const id = useId();
 
-  // In the layout phase, so that closing still finds the sheet in the page and gives the focus back.
+  // The sheet stays in the page while it is shut: only a closing dialog that is still there gives the focus back.
   useLayoutEffect(() => {
     const dialog = sheet.current;
     if (!open || !dialog) return;
@@ -27,7 +27,6 @@ export function Dialog({ open, onOpenChange, title, description, children, actio
     return () => dialog.close();
   }, [open]);
 
-  if (!open) return null;
   return (
     // biome-ignore lint/a11y/useKeyWithClickEvents: Escape does by key what a click on the ground does
     <dialog
@@ -44,16 +43,18 @@ export function Dialog({ open, onOpenChange, title, description, children, actio
       }}
       className="m-auto w-[min(36rem,calc(100vw-2rem))] max-w-none border border-ink bg-sheet p-0 text-ink backdrop:bg-[rgb(0_0_0/0.6)]"
     >
-      <div className="flex flex-col gap-4 p-4 tablet:p-6">
-        <h2 id={`${id}-title`} className="text-title">
-          {title}
-        </h2>
-        <div id={`${id}-about`} className="text-ink-2">
-          {description}
+      {open && (
+        <div className="flex flex-col gap-4 p-4 tablet:p-6">
+          <h2 id={`${id}-title`} className="text-title">
+            {title}
+          </h2>
+          <div id={`${id}-about`} className="text-ink-2">
+            {description}
+          </div>
+          {children}
+          <div className="flex flex-wrap justify-end gap-3">{actions}</div>
         </div>
-        {children}
-        <div className="flex flex-wrap justify-end gap-3">{actions}</div>
-      </div>
+      )}
     </dialog>
   );
 }

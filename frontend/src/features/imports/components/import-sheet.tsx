@@ -22,7 +22,7 @@ export function ImportSheet({ record, fate }: { record: Import; fate: Fate | und
         <>
           <FateFilter counts={record.counts} total={record.rows ?? 0} chosen={fate} />
           {/* Publishing gives new rows their records: the rows are asked for anew under the new state. */}
-          <RowTable key={record.status} id={record.id} table={record.table} fate={fate} />
+          <RowTable key={record.status} id={record.id} table={record.table} fate={fate} published={record.status === 'published'} />
         </>
       )}
     </div>
@@ -140,10 +140,7 @@ function Published({ record }: { record: Import }) {
     <div className="flex flex-col items-start gap-3">
       <div role="status">
         <Notice title={`Published as edition ${record.edition}.`}>
-          <p className="text-ink-2">
-            {record.counts && publishableWords(record.counts)} reached the catalog. Each row below leads to its record; the first page finds{' '}
-            {record.table === 'hulls' ? 'the boats' : 'them'} by name.
-          </p>
+          <p className="text-ink-2">{record.counts && publishableWords(record.counts)} reached the catalog and can be found by name now.</p>
         </Notice>
       </div>
       <div className="flex flex-wrap gap-3">
@@ -155,7 +152,8 @@ function Published({ record }: { record: Import }) {
 }
 
 function Remarks({ record: { sameFileAs, unknownColumns, status } }: { record: Import }) {
-  const leftOut = status === 'published' ? 'their cells were left out' : 'their cells will be left out';
+  const cells = unknownColumns.length === 1 ? 'its cells' : 'their cells';
+  const leftOut = `${cells} ${status === 'published' ? 'were' : 'will be'} left out`;
   return (
     <>
       {sameFileAs && (

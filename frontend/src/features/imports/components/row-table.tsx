@@ -16,13 +16,15 @@ interface RowTableProps {
   id: string;
   table: Table;
   fate: Fate | undefined;
+  /** Its new records can be looked up by name. */
+  published: boolean;
 }
 
 /** The rows with what is wrong, doubtful or different in each. */
-export function RowTable({ id, table, fate }: RowTableProps) {
+export function RowTable({ id, table, fate, published }: RowTableProps) {
   const units = useUnits();
   const query = useImportRows(id, fate, true);
-  const columns = useMemo(() => columnsFor(table, units), [table, units]);
+  const columns = useMemo(() => columnsFor(table, units, published), [table, units, published]);
   const rows = useMemo(() => query.data?.pages.flatMap((page) => page.data) ?? [], [query.data]);
   if (query.isPending) return <Pending what="Fetching the rows" />;
   if (query.isError && rows.length === 0) return <Failure error={query.error} what="fetch the rows" retry={() => void query.refetch()} />;
@@ -45,7 +47,7 @@ export function RowTable({ id, table, fate }: RowTableProps) {
   );
 }
 
-function columnsFor(table: Table, units: UnitChoice): readonly TableColumn<ListedRow>[] {
+function columnsFor(table: Table, units: UnitChoice, published: boolean): readonly TableColumn<ListedRow>[] {
   return [
     {
       id: 'n',
@@ -58,7 +60,7 @@ function columnsFor(table: Table, units: UnitChoice): readonly TableColumn<Liste
         </span>
       ),
     },
-    { id: 'name', header: 'About', narrow: 'head', cell: ({ row }) => <About row={row.original} table={table} /> },
+    { id: 'name', header: 'About', narrow: 'head', cell: ({ row }) => <About row={row.original} table={table} published={published} /> },
     {
       id: 'fate',
       header: 'Fate',
@@ -78,13 +80,21 @@ function columnsFor(table: Table, units: UnitChoice): readonly TableColumn<Liste
   ];
 }
 
-function About({ row, table }: { row: ListedRow; table: Table }) {
-  if (row.record === null || table === 'trim-points') return <span className="font-firm">{row.name}</span>;
+function About({ row, table, published }: { row: ListedRow; table: Table; published: boolean }) {
+  const to = addressOf(row, table, published);
+  if (to === null) return <span className="font-firm">{row.name}</span>;
   return (
-    <Link to={paths.part(table, row.record)} className="font-firm">
+    <Link to={to} className="font-firm">
       {row.name}
     </Link>
   );
+}
+
+/** The record's sheet; a new boat, which had none when the row was judged, by its name. */
+function addressOf({ record, fate, name }: ListedRow, table: Table, published: boolean): string | null {
+  if (table === 'trim-points') return null;
+  if (record !== null) return paths.part(table, record);
+  return published && fate === 'new' && table === 'hulls' ? `${paths.home}?q=${encodeURIComponent(name)}` : null;
 }
 
 function Findings({ row, table, units }: { row: ListedRow; table: Table; units: UnitChoice }) {
