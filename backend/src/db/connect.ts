@@ -11,8 +11,20 @@ import * as mail from './schema/mail.ts';
 import * as outbox from './schema/outbox.ts';
 import * as people from './schema/people.ts';
 import * as savedFits from './schema/saved-fits.ts';
+import * as webhooks from './schema/webhooks.ts';
 
-export const schema = { ...catalog, ...people, ...imports, ...importWork, ...outbox, ...access, ...mail, ...limits, ...savedFits };
+export const schema = {
+  ...catalog,
+  ...people,
+  ...imports,
+  ...importWork,
+  ...outbox,
+  ...access,
+  ...mail,
+  ...limits,
+  ...savedFits,
+  ...webhooks,
+};
 export type Db = BetterSQLite3Database<typeof schema> & { $client: Database.Database };
 
 /** Opens (and makes, where missing) the database file; `:memory:` for tests that need no file. */
