@@ -48,7 +48,7 @@ export function wedgeOutline(sensor: SceneSensor, side: Side, fromDeg: number, t
 }
 
 /** Where a direction of the fan is after `distanceM`, boat frame. */
-export function fanPointM(sensor: SceneSensor, side: Side, depressionDeg: number, distanceM: number): Vec3 {
+function fanPointM(sensor: SceneSensor, side: Side, depressionDeg: number, distanceM: number): Vec3 {
   const [x, y, z] = rotate(sensor.pose.rotation, fanDirection(side, depressionDeg));
   const [ox, oy, oz] = sensor.pose.originM;
   return [ox + x * distanceM, oy + y * distanceM, oz + z * distanceM];

@@ -30,7 +30,7 @@ export function DimensionAcross({ fromX, toX, y, fromY, toY, text }: AcrossProps
 }
 
 /** The slash that ends a dimension line, as on a drawing board. */
-export function Slash({ x, y }: { x: number; y: number }) {
+function Slash({ x, y }: { x: number; y: number }) {
   return <line x1={round(x - 4)} y1={round(y + 4)} x2={round(x + 4)} y2={round(y - 4)} strokeWidth="1.5" />;
 }
 

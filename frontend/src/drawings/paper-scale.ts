@@ -2,7 +2,7 @@
 import type { Point2 } from './views.ts';
 
 /** CSS reference pixels in a metre: 96 to the inch of 25.4 mm (CSS Values and Units Level 4, 6.2). */
-export const pxPerMetre = 96 / 0.0254;
+const pxPerMetre = 96 / 0.0254;
 
 /** What has to be seen, metres on paper. */
 export interface PaperBounds {

@@ -5,8 +5,7 @@ import type { Vec3 } from '@tiltwright/shared/engine/vec3.ts';
 /** A point on paper, metres before scaling: u to the right, v down. */
 export type Point2 = readonly [number, number];
 
-export const views = ['astern', 'side', 'above'] as const;
-export type View = (typeof views)[number];
+export type View = 'astern' | 'side' | 'above';
 
 /**
  * Projects a point of the boat frame (or of the water frame, for the side view) onto paper.

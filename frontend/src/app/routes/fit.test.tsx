@@ -98,8 +98,8 @@ describe('the check', { timeout: 30_000 }, () => {
     await verdict().findByText(/The port side is/);
     fireEvent.change(screen.getByRole('slider', { name: 'Motor trim while scanning, slider' }), { target: { value: '16' } });
     await user.click(screen.getByRole('button', { name: 'More: Motor trim while scanning' }));
+    await waitFor(() => expect(asked.at(-1)?.lowerUnits[0]?.motorTrimDeg).toBe(17));
     expect(await verdict().findByText('Both sides look out freely.')).toBeInTheDocument();
-    expect(asked.at(-1)?.lowerUnits[0]?.motorTrimDeg).toBe(17);
     await waitFor(() => expect(router.state.location.search).toContain('motorTrimDeg=17'));
     await waitFor(() => expect(router.state.location.search).toContain('edition=7'));
   });

@@ -1,7 +1,7 @@
 import { FitQuestion } from '@tiltwright/shared/schemas/fit.ts';
 import { describe, expect, it } from 'vitest';
 import { fitFieldNames, fitFields } from './fit-fields.ts';
-import { fitQuestionOf, isUntouched, motorName } from './fit-question.ts';
+import { fitQuestionOf, motorName } from './fit-question.ts';
 import { type FitState, standardState } from './fit-state.ts';
 import { stateOfQuestion } from './saved-question.ts';
 
@@ -42,11 +42,6 @@ describe('the question of a check', () => {
     expect(fitQuestionOf(state({ cruiseKn: 18, cruiseMotorTrimDeg: 3 })).alsoAt).toEqual([
       { label: 'cruising', speedKn: 18, motorTrimDeg: 3 },
     ]);
-  });
-
-  it('knows an untouched check', () => {
-    expect(isUntouched(standardState)).toBe(true);
-    expect(isUntouched(state({ form: 'deep-v' }))).toBe(false);
   });
 });
 

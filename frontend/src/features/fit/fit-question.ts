@@ -3,7 +3,7 @@ import type { FitQuestion } from '@tiltwright/shared/schemas/fit.ts';
 import type { InlineHull } from '@tiltwright/shared/schemas/hull.ts';
 import type { InlineLowerUnit } from '@tiltwright/shared/schemas/lower-unit.ts';
 import type { InlineTransducer } from '@tiltwright/shared/schemas/transducer.ts';
-import { type FitState, standardState } from './fit-state.ts';
+import type { FitState } from './fit-state.ts';
 
 export const cruisingLabel = 'cruising';
 
@@ -80,9 +80,4 @@ function motorPose({ motorTrimDeg, steerDeg, setbackMm, raiseMm }: FitState) {
 
 function known<K extends string>(name: K, value: number | null): Partial<Record<K, number>> {
   return value === null ? {} : ({ [name]: value } as Record<K, number>);
-}
-
-/** True where nothing about the boat has been said yet. */
-export function isUntouched(state: FitState): boolean {
-  return (Object.keys(state) as (keyof FitState)[]).every((name) => state[name] === standardState[name]);
 }

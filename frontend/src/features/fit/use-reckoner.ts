@@ -5,7 +5,7 @@ import type { FitJob, FitResult } from './fit-job.ts';
 type Lane = 'live' | 'full';
 export type Ask = Omit<FitJob, 'id'>;
 /** An answer with the question it belongs to. */
-export interface Reckoned {
+interface Reckoned {
   ask: Ask;
   answer: FitAnswer;
 }

@@ -15,7 +15,7 @@ export interface FoundPart {
 
 const limit = 8;
 
-export async function findParts(kind: FitPartName, q: string, signal: AbortSignal): Promise<FoundPart[]> {
+async function findParts(kind: FitPartName, q: string, signal: AbortSignal): Promise<FoundPart[]> {
   const params = { query: { limit, ...(q !== '' && { q }) } };
   switch (kind) {
     case 'hull':
@@ -31,7 +31,7 @@ export async function findParts(kind: FitPartName, q: string, signal: AbortSigna
   }
 }
 
-export const findPartsQuery = (kind: FitPartName, q: string) =>
+const findPartsQuery = (kind: FitPartName, q: string) =>
   queryOptions({
     queryKey: ['find-parts', kind, q],
     queryFn: ({ signal }) => findParts(kind, q, signal),

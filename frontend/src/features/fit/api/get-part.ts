@@ -28,7 +28,7 @@ const parts = {
 type Parts = typeof parts;
 export type PartSheet<K extends keyof Parts> = Awaited<ReturnType<Parts[K]>>;
 
-export const partQuery = <K extends keyof Parts>(kind: K, id: string | null) =>
+const partQuery = <K extends keyof Parts>(kind: K, id: string | null) =>
   queryOptions({
     queryKey: ['part', kind, id],
     queryFn: id === null ? skipToken : ({ signal }) => parts[kind](id, signal) as Promise<PartSheet<K>>,

@@ -69,7 +69,7 @@ function SideRows({ name, side, state }: { name: SideName; side: SideAnswer; sta
           <td className="py-1 pl-8">
             {Math.round(sector.fromDeg)}° – {Math.round(sector.toDeg)}° {sector.kind} by the {hiderWords(sector.by, state)}
           </td>
-          <td className="py-1 text-right">{formatShare(sector.share)}</td>
+          <td className="py-1 text-right align-top whitespace-nowrap">{formatShare(sector.share)} of the picture</td>
         </tr>
       ))}
     </>

@@ -38,9 +38,11 @@ export function PartPicker({ kind, label, id, name, sheet, onChange, without, ch
       {id !== null && (
         <p>
           {kind !== 'hull' && <span className="block font-firm">{label}</span>}
-          <Link to={sheet(id)} className="inline-flex min-h-11 items-center">
-            {name ?? 'Its sheet'}
-          </Link>
+          {name && (
+            <Link to={sheet(id)} className="inline-flex min-h-11 items-center">
+              {name}
+            </Link>
+          )}
         </p>
       )}
       <div className="flex flex-wrap gap-2">
