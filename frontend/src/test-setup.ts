@@ -7,10 +7,12 @@ afterEach(() => {
   globalThis.localStorage?.clear();
 });
 
-// jsdom has dialogs but no modal ones.
-HTMLDialogElement.prototype.showModal ??= function showModal(this: HTMLDialogElement) {
-  this.open = true;
-};
-HTMLDialogElement.prototype.close ??= function close(this: HTMLDialogElement) {
-  this.open = false;
-};
+// jsdom has dialogs but no modal ones; a test of plain files runs without any page.
+if (typeof HTMLDialogElement !== 'undefined') {
+  HTMLDialogElement.prototype.showModal ??= function showModal(this: HTMLDialogElement) {
+    this.open = true;
+  };
+  HTMLDialogElement.prototype.close ??= function close(this: HTMLDialogElement) {
+    this.open = false;
+  };
+}
