@@ -1,6 +1,6 @@
 import { defineConfig } from 'vitest/config';
 
-// One run, four projects: engine and shared code, published truth, the API, and the screens' parts in jsdom.
+// One run: engine and shared code, published truth, the API, what goes wrong, and the screens' parts in jsdom.
 export default defineConfig({
   test: {
     projects: [
@@ -12,6 +12,15 @@ export default defineConfig({
           include: ['backend/src/**/*.test.ts', 'tests/start/**/*.test.ts'],
           environment: 'node',
           testTimeout: 20_000,
+          globalSetup: './tests/support/seeded-database.ts',
+        },
+      },
+      {
+        test: {
+          name: 'faults',
+          include: ['tests/faults/**/*.test.ts'],
+          environment: 'node',
+          testTimeout: 120_000,
           globalSetup: './tests/support/seeded-database.ts',
         },
       },

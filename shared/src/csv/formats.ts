@@ -132,6 +132,10 @@ export function quoteLenient(text: string, delimiter: Delimiter, parse: ParseRec
     const { code, records = 0 } = error as CsvParseError;
     if (code !== 'CSV_QUOTE_NOT_CLOSED' && code !== 'CSV_MAX_RECORD_SIZE') throw error;
     const row = records + 1;
+    if (code === 'CSV_MAX_RECORD_SIZE' && !text.includes('"')) {
+      const tooLong = `Row ${row} is longer than ${mostRecordBytes} characters; at most ${mostColumns} cells are read.`;
+      return { problem: 'too-many-columns', message: tooLong, row };
+    }
     const message = `A quote mark opens a cell in row ${row} and never closes. Close it, or double the mark where it means inches at the start of a cell.`;
     return { problem: 'unbalanced-quotes', message, row };
   }

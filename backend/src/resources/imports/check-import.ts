@@ -48,12 +48,22 @@ export async function runCheck(deps: CheckDeps, id: string): Promise<void> {
     await judgeRows(deps, id);
   } catch (error) {
     if (!db.$client.open) return;
+    if (isFull(error)) makeRoom(db, id);
     setImport(db, id, { status: 'failed', problem: reasonOf(error) });
     if (!(error instanceof ApiProblem) && !isFull(error)) throw error;
   }
 }
 
 const isFull = (error: unknown) => ['SQLITE_FULL', 'ENOSPC'].includes((error as { code?: string }).code ?? '');
+
+/** Judged rows can be had again, and saying why the check ended needs room too. */
+function makeRoom(db: Db, id: string): void {
+  try {
+    rowStore(db, id).clear();
+  } catch (error) {
+    if (!isFull(error)) throw error;
+  }
+}
 
 function reasonOf(error: unknown): { code: string; message: string } {
   if (error instanceof ApiProblem) return { code: error.code, message: error.message };
