@@ -21,7 +21,7 @@ export function Shell() {
         <ErrorBoundary resetOn={pathname}>
           <Suspense
             fallback={
-              <div className="px-4 py-6 desk:px-6">
+              <div className="min-h-dvh px-4 py-6 desk:px-6">
                 <Pending what="Fetching the screen" />
               </div>
             }

@@ -31,6 +31,7 @@ interface AsternDrawingProps {
   onMoveSensor?: ((offsetM: number) => void) | undefined;
   /** Of the drawing alone, without the key of letters that follows it. */
   className?: string;
+  keyClassName?: string;
 }
 
 const margins = { leftPx: 12, rightPx: 12, topPx: 48, bottomPx: 30 };
@@ -45,6 +46,7 @@ export function AsternDrawing({
   maxHeightPx,
   onMoveSensor,
   className = '',
+  keyClassName = '',
 }: AsternDrawingProps) {
   const id = useId();
   const [boxRef, widthPx] = useMeasuredWidth<HTMLDivElement>(640);
@@ -164,7 +166,7 @@ export function AsternDrawing({
           )}
         </DrawingFrame>
       </div>
-      <WedgeKey labels={labels} />
+      <WedgeKey labels={labels} className={keyClassName} />
     </>
   );
 }

@@ -32,26 +32,18 @@ export default function Fit() {
 
   const boat = state.hull === null ? `${hullFormWords(state.form)}, ${formatQuantity(state.lengthM, 'lengthM', units)}` : names.hull;
   return (
-    // On a phone: verdict, drawing, inputs, answer, then the other two drawings. On a desk: inputs, drawings, answer side by side.
+    // On a phone: drawing, verdict, inputs, answer, then the other two drawings. On a desk: inputs, drawings, answer side by side.
     <div className="flex flex-col desk:grid desk:grid-cols-[20rem_minmax(0,1fr)_23rem] desk:grid-rows-[auto_auto_1fr]">
       <div className="desk:col-span-3">
         <AddressNotes refused={refused} onForget={forgetRefused} stamp={stamp} answer={fresh} />
       </div>
-      <section aria-label="Verdict" className="flex flex-col gap-3 px-4 py-4 desk:col-start-3 desk:row-start-2 desk:px-6">
-        <PageTitle title={boat ? `Check a fit: ${boat}` : 'Check a fit'} className="text-body">
-          Check a fit{boat && `: ${boat}`}
-        </PageTitle>
-        {failed && <PartFailure {...failed} />}
-        {error !== null && !failed && <Failure error={error} what="work out this check" retry={retry} />}
-        {onDevice && <p className="text-note text-ink-2">The server is out of reach: worked out on this device.</p>}
-        {answer ? <Verdict answer={answer} state={state} stale={stale} /> : error === null && !failed && <Pending what="Working it out" />}
-      </section>
       <div className="contents bg-sheet desk:col-start-2 desk:row-span-2 desk:row-start-2 desk:block desk:border-x desk:border-rule">
         <div className="contents desk:sticky desk:top-0 desk:block">
           {parts ? (
             <>
               <FitAstern state={state} parts={parts} answer={moving} stale={pale} change={change} />
-              <FitSideAndAbove state={state} parts={parts} answer={moving} stale={pale} />
+              {/* Only with the answer, whose key of letters would otherwise push them down. */}
+              {moving && <FitSideAndAbove state={state} parts={parts} answer={moving} stale={pale} />}
             </>
           ) : (
             !failed && (
@@ -62,6 +54,18 @@ export default function Fit() {
           )}
         </div>
       </div>
+      <section
+        aria-label="Verdict"
+        className="flex min-h-76 flex-col gap-3 px-4 py-4 max-desk:order-1 desk:col-start-3 desk:row-start-2 desk:px-6"
+      >
+        <PageTitle title={boat ? `Check a fit: ${boat}` : 'Check a fit'} className="text-body">
+          Check a fit{boat && `: ${boat}`}
+        </PageTitle>
+        {failed && <PartFailure {...failed} />}
+        {error !== null && !failed && <Failure error={error} what="work out this check" retry={retry} />}
+        {onDevice && <p className="text-note text-ink-2">The server is out of reach: worked out on this device.</p>}
+        {answer ? <Verdict answer={answer} state={state} stale={stale} /> : error === null && !failed && <Pending what="Working it out" />}
+      </section>
       <div className="border-t border-rule max-desk:order-3 max-desk:[&_*]:scroll-mt-96 desk:col-start-1 desk:row-span-2 desk:row-start-2 desk:border-t-0">
         <FitInputs
           state={state}
