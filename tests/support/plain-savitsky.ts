@@ -4,7 +4,7 @@ import type { PlaningHull, Thrust } from '@tiltwright/shared/engine/trim/savitsk
 import { degToRad, gravityMps2, radToDeg, type Water } from '@tiltwright/shared/engine/units.ts';
 
 /** Lift coefficient of a flat plate that carries the same at deadrise β°: inverts C_Lβ = C_L0 − 0.0065 β C_L0^0.60 (eq. 16). */
-export function flatPlateLift(liftCoefficient: number, deadriseDeg: number): number {
+function flatPlateLift(liftCoefficient: number, deadriseDeg: number): number {
   const k = 0.0065 * deadriseDeg;
   // Above the turning point (0.0039 β)^2.5 the curve rises and bends upward, so Newton from above comes down without overshoot.
   let c = liftCoefficient + k * Math.max(1, liftCoefficient) ** 0.6 + (2 * k) ** 2.5;
@@ -18,7 +18,7 @@ export function flatPlateLift(liftCoefficient: number, deadriseDeg: number): num
 }
 
 /** Solves 0.0120 λ^½ + 0.0055 λ^2.5/Cv² = C_L0/τ^1.1 (eq. 15) for λ; the left side only rises. */
-export function wettedLengthRatio(liftOverTrim: number, cvSquared: number): number {
+function wettedLengthRatio(liftOverTrim: number, cvSquared: number): number {
   // With r = λ^½ this is a r + b r⁵ = lift: convex, so Newton from above is safe.
   const a = 0.012;
   const b = 0.0055 / cvSquared;
@@ -33,7 +33,7 @@ export function wettedLengthRatio(liftOverTrim: number, cvSquared: number): numb
 }
 
 /** Everything that follows from a trim; `momentNm` is bow-down positive and 0 at equilibrium. Null where the formulas give none. */
-export function planingBalance(hull: PlaningHull, thrust: Thrust, speedMps: number, water: Water, trimRad: number) {
+function planingBalance(hull: PlaningHull, thrust: Thrust, speedMps: number, water: Water, trimRad: number) {
   const b = hull.chineBeamM;
   const weight = hull.massKg * gravityMps2;
   const beta = radToDeg(hull.deadriseRad);

@@ -11,7 +11,7 @@ import { reachM } from '@tiltwright/shared/engine/thresholds.ts';
 import type { Vec3 } from '@tiltwright/shared/engine/vec3.ts';
 
 /** Where the rays of a slab start, boat frame, m. */
-export function cellOrigins(sensor: Pose, apertureM: number): Vec3[] {
+function cellOrigins(sensor: Pose, apertureM: number): Vec3[] {
   const along = rotate(sensor.rotation, [1, 0, 0]);
   return Array.from({ length: apertureCells }, (_, cell) => {
     const s = ((cell + 0.5) / apertureCells - 0.5) * apertureM;
@@ -20,7 +20,7 @@ export function cellOrigins(sensor: Pose, apertureM: number): Vec3[] {
 }
 
 /** A ray's direction in the boat frame: depression from the sensor's level, along-track angle forward positive. Unit length. */
-export function rayDirection(sensor: Pose, side: Side, depressionRad: number, alongRad: number): Vec3 {
+function rayDirection(sensor: Pose, side: Side, depressionRad: number, alongRad: number): Vec3 {
   const c = Math.cos(alongRad);
   const outward = Math.cos(depressionRad) * c;
   return rotate(sensor.rotation, [Math.sin(alongRad), side === 'starboard' ? outward : -outward, Math.sin(depressionRad) * c]);

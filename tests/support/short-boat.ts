@@ -14,7 +14,7 @@ export interface ShortBoat {
   offsetMm: number;
 }
 
-export const asUsual: ShortBoat = { powerHp: 25, motorTrimDeg: 0, housingLengthMm: 220, standoffMm: 30, tiltDeg: 0, offsetMm: 380 };
+const asUsual: ShortBoat = { powerHp: 25, motorTrimDeg: 0, housingLengthMm: 220, standoffMm: 30, tiltDeg: 0, offsetMm: 380 };
 
 /** Clearance of the short boat, changed where the caller says so. */
 export function shortBoat(changes: Partial<ShortBoat>) {

@@ -5,7 +5,7 @@ import { afterAll, describe, expect, it } from 'vitest';
 
 export type TruthRow = Record<string, string>;
 
-export function readTruth(name: string): TruthRow[] {
+function readTruth(name: string): TruthRow[] {
   return parse(readFileSync(new URL(`../truth/${name}.csv`, import.meta.url), 'utf8'), { columns: true, skip_empty_lines: true });
 }
 
