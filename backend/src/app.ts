@@ -32,7 +32,10 @@ export function createApp(deps: Deps, logger: Logger = pino({ level: deps.config
     pinoHttp({
       logger,
       genReqId: requestId,
-      serializers: { req: ({ id, method, url }) => ({ id, method, url }), res: ({ statusCode }) => ({ statusCode }) },
+      serializers: {
+        req: ({ id, method, url }) => ({ id, method, url: withoutToken(String(url)) }),
+        res: ({ statusCode }) => ({ statusCode }),
+      },
     }),
   );
   app.use((req, res, next) => {
@@ -71,6 +74,9 @@ export function createApp(deps: Deps, logger: Logger = pino({ level: deps.config
   app.use(problemHandler);
   return app;
 }
+
+/** What follows in these addresses opens something for whoever reads it, also in a log. */
+const withoutToken = (url: string) => url.replace(/(\/(?:invitations|password-resets)\/)[^/?]+/, '$1…');
 
 /** A caller's own id is kept where it is short and plain, so that both logs speak of the same request. */
 function requestId(req: { headers: Record<string, string | string[] | undefined> }): string {

@@ -14,5 +14,6 @@ declare global {
 declare module 'express-session' {
   interface SessionData {
     passport?: { user?: string };
+    startedAt?: string;
   }
 }

@@ -14,8 +14,11 @@ import { fitPool } from './fit-pool/fit-pool.ts';
 import type { ImportJobs } from './jobs/import-jobs.ts';
 import { inProcessJobs } from './jobs/in-process-jobs.ts';
 import { workerJobs } from './jobs/worker-jobs.ts';
+import { startMailWorker } from './mail/mail-worker.ts';
+import { mailTransport } from './mail/transport.ts';
 import { migrationsFolder, seedsFolder } from './paths.ts';
 import { recoverImports } from './resources/imports/recover-imports.ts';
+import { startNightly } from './resources/retention/nightly.ts';
 import { flushEveryMs } from './resources/usage/usage-counter.ts';
 import { StartProblem } from './start-problem.ts';
 
@@ -34,14 +37,20 @@ async function start(): Promise<void> {
   }, flushEveryMs).unref();
   const app = createApp(deps, logger);
   const server = await listen(app.listen.bind(app), config);
+  const { port } = server.address() as AddressInfo;
+  // Any free port is known only now; links in mails begin with it.
+  if (config.port === 0 && process.env.SITE_URL === undefined) config.siteUrl = siteAddress(config, port);
+  const stopMail = startMailWorker(deps, mailTransport(config), logger);
+  const stopNightly = startNightly(deps, logger);
   stopOnSignal(server, async () => {
     clearInterval(flushing);
+    await Promise.all([stopMail(), stopNightly()]);
     await deps.jobs.close();
     await deps.pool.close();
     deps.usage.flush();
     db.$client.close();
   });
-  greet(config, (server.address() as AddressInfo).port);
+  greet(config, port);
 }
 
 function openDatabase(config: Config): Db {
@@ -89,9 +98,11 @@ function stopOnSignal(server: Server, end: () => Promise<void>): void {
   process.once('SIGINT', stop);
 }
 
+const siteAddress = ({ host }: Config, port: number) => `http://${host.includes(':') ? `[${host}]` : host}:${port}`;
+
 function greet(config: Config, port: number): void {
-  const host = config.host.includes(':') ? `[${config.host}]` : config.host;
-  const lines = [`Tiltwright is ready on http://${host}:${port}`, `API: http://${host}:${port}/api/docs`];
+  const address = siteAddress(config, port);
+  const lines = [`Tiltwright is ready on ${address}`, `API: ${address}/api/docs`];
   if (config.mode !== 'production')
     lines.push('Demo accounts (password for all: ' + demoPassword + '):', ...demoAccounts.map(({ email }) => `  ${email}`));
   process.stdout.write(`${lines.join('\n')}\n`);

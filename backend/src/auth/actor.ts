@@ -3,7 +3,13 @@ import type { Role, Scope } from '@tiltwright/shared/schemas/account.ts';
 /** Who is asking. */
 export type Actor =
   | { kind: 'visitor'; hadSession: boolean }
-  | { kind: 'person'; userId: string; roles: readonly Role[] }
+  | {
+      kind: 'person';
+      userId: string;
+      roles: readonly Role[];
+      /** The site asks staff for a second factor and this account has none: staff work is refused until it does. */
+      factorLacking: boolean;
+    }
   | {
       kind: 'key';
       keyId: string;

@@ -1,11 +1,12 @@
 // Who is asking: a bearer key, a session, or a visitor. Sets req.actor; decides nothing else.
-import { eq, sql } from 'drizzle-orm';
+import { and, eq, isNotNull, sql } from 'drizzle-orm';
 import type { RequestHandler } from 'express';
 import session from 'express-session';
 import passport from 'passport';
 import { Strategy as BearerStrategy } from 'passport-http-bearer';
 import type { Config } from '../config.ts';
 import type { Db } from '../db/connect.ts';
+import { secondFactors } from '../db/schema/access.ts';
 import { apiKeys, users } from '../db/schema/people.ts';
 import { ApiProblem } from '../errors.ts';
 import { allowOrigin } from '../http/cors.ts';
@@ -21,6 +22,11 @@ export function identify(db: Db, config: Config): RequestHandler[] {
     .select()
     .from(users)
     .where(eq(users.id, sql.placeholder('id')))
+    .prepare();
+  const findFactor = db
+    .select({ userId: secondFactors.userId })
+    .from(secondFactors)
+    .where(and(eq(secondFactors.userId, sql.placeholder('id')), isNotNull(secondFactors.confirmedAt)))
     .prepare();
   const findKey = db
     .select({ key: apiKeys, user: users })
@@ -95,7 +101,15 @@ export function identify(db: Db, config: Config): RequestHandler[] {
     if (req.actor) return next();
     const user = req.user && findUser.get({ id: req.user.id });
     const hadSession = new RegExp(`(^|;\\s*)${cookieName}=`).test(req.headers.cookie ?? '');
-    req.actor = user && !user.disabledAt ? { kind: 'person', userId: user.id, roles: user.roles } : { kind: 'visitor', hadSession };
+    req.actor =
+      user && !user.disabledAt
+        ? {
+            kind: 'person',
+            userId: user.id,
+            roles: user.roles,
+            factorLacking: config.staffSecondFactor && !findFactor.get({ id: user.id }),
+          }
+        : { kind: 'visitor', hadSession };
     next();
   };
 

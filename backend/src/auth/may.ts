@@ -19,6 +19,7 @@ const rules = {
   'keys.own': { who: ['integrator'], scope: null },
   'batch.compute': { who: 'members', scope: 'fit:compute' },
   'webhooks.own': { who: ['integrator'], scope: 'webhooks:manage' },
+  'site.run': { who: ['admin'], scope: null },
   'limits.manage': { who: ['admin'], scope: null },
   'imports.manage': { who: ['steward'], scope: null },
 } as const satisfies Record<string, Rule>;
@@ -28,7 +29,7 @@ export const permissions = Object.keys(rules) as Permission[];
 /** An admin may all that a steward may; customer and integrator stand on their own. */
 const effectiveRoles = (roles: readonly Role[]) => (roles.includes('admin') ? [...roles, 'steward' as const] : roles);
 
-/** @throws ApiProblem sign-in-needed, session-expired, scope-missing or not-allowed */
+/** @throws ApiProblem sign-in-needed, session-expired, scope-missing, not-allowed or second-factor-required */
 export function demand(actor: Actor, permission: Permission): void {
   const rule: Rule = rules[permission];
   if (actor.kind === 'key') {
@@ -44,6 +45,8 @@ export function demand(actor: Actor, permission: Permission): void {
   if (rule.who === 'members') return;
   const roles = effectiveRoles(actor.roles);
   if (!rule.who.some((role) => roles.includes(role))) throw new ApiProblem('not-allowed', `This needs the role ${rule.who.join(' or ')}.`);
+  if (isStaffWork(permission) && actor.kind === 'person' && actor.factorLacking)
+    throw new ApiProblem('second-factor-required', 'Set up a second factor on your account page first; this site asks it of its staff.');
 }
 
 /** In words, for the API document. */
@@ -54,4 +57,9 @@ export function describePermission(permission: Permission): string {
 }
 
 export const keyScopeOf = (permission: Permission): Scope | null => rules[permission].scope;
+/** Whether it is work of stewards or admins alone. */
+export function isStaffWork(permission: Permission): boolean {
+  const { who }: Rule = rules[permission];
+  return typeof who !== 'string' && who.every((role) => role === 'steward' || role === 'admin');
+}
 export const openToAnyone = (permission: Permission): boolean => rules[permission].who === 'anyone';

@@ -3,7 +3,7 @@ import { OpenAPIRegistry, OpenApiGeneratorV31, type ResponseConfig } from '@aste
 import { Problem, type ProblemCode, problems } from '@tiltwright/shared/schemas/problem.ts';
 import * as z from 'zod';
 import { cookieName } from '../auth/identify.ts';
-import { describePermission, keyScopeOf, openToAnyone } from '../auth/may.ts';
+import { describePermission, isStaffWork, keyScopeOf, openToAnyone } from '../auth/may.ts';
 import { costOf, type Operation, type Route, takesIdempotencyKey } from './operation.ts';
 
 export const apiVersion = '1.0.0';
@@ -40,7 +40,8 @@ export function openApiDocument(routes: readonly Route[]) {
 const tagWords: Record<string, string> = {
   Catalog: 'Hulls, lower units, transducers and mounts, each value with where it comes from.',
   Questions: 'Tilt, clearance and the whole check.',
-  Accounts: 'Signing up, in and out.',
+  Accounts: 'Signing up, in and out; one’s own account.',
+  Administration: 'People, invitations, the audit log, mails and the site’s health.',
   'API keys': 'Keys for programs.',
   Limits: 'How much each kind of caller may ask.',
   Boats: 'A person’s own boats.',
@@ -149,6 +150,7 @@ function problemCodesOf(operation: Operation): ProblemCode[] {
   if (operation.repeat === 'refuse') codes.push('already-created');
   if (operation.etag && operation.method !== 'get') codes.push('stale-revision');
   if (!openToAnyone(operation.may)) codes.push('sign-in-needed', 'session-expired', 'not-allowed');
+  if (isStaffWork(operation.may)) codes.push('second-factor-required');
   codes.push('invalid-key', 'not-allowed');
   return [...codes, ...(operation.problems ?? [])];
 }

@@ -1,5 +1,5 @@
 import type { Logger } from 'pino';
-import type { Db } from '../db/connect.ts';
+import type { Deps } from '../deps.ts';
 import { deliverDueMail } from './deliver-mail.ts';
 import type { MailTransport } from './transport.ts';
 
@@ -7,7 +7,11 @@ import type { MailTransport } from './transport.ts';
 const everyMs = 1000;
 
 /** Sends what is due, again and again, until stopped; it keeps no process alive. */
-export function startMailWorker(db: Db, transport: MailTransport, logger: Pick<Logger, 'error' | 'warn'>): () => Promise<void> {
+export function startMailWorker(
+  { db, jobs }: Pick<Deps, 'db' | 'jobs'>,
+  transport: MailTransport,
+  logger: Pick<Logger, 'error' | 'warn'>,
+): () => Promise<void> {
   let running: Promise<void> = Promise.resolve();
   let busy = false;
   const round = async () => {
@@ -21,7 +25,8 @@ export function startMailWorker(db: Db, transport: MailTransport, logger: Pick<L
     }
   };
   const timer = setInterval(() => {
-    if (busy) return;
+    // While an edition is written, a write of ours would hold up every request.
+    if (busy || jobs.isWriting()) return;
     busy = true;
     running = round();
   }, everyMs);

@@ -11,6 +11,9 @@ const Transducer = lazy(() => import('./routes/transducer.tsx'));
 const Mount = lazy(() => import('./routes/mount.tsx'));
 const SignIn = lazy(() => import('./routes/sign-in.tsx'));
 const SignUp = lazy(() => import('./routes/sign-up.tsx'));
+const Verify = lazy(() => import('./routes/verify.tsx'));
+const Reset = lazy(() => import('./routes/reset.tsx'));
+const Outbox = lazy(() => import('./routes/outbox.tsx'));
 const Steward = lazy(() => import('./routes/steward.tsx'));
 const StewardImport = lazy(() => import('./routes/steward-import.tsx'));
 const NotFound = lazy(() => import('./routes/not-found.tsx'));
@@ -28,6 +31,9 @@ export function Router() {
           <Route path="mounts/:id" element={<Mount />} />
           <Route path="sign-in" element={<SignIn />} />
           <Route path="sign-up" element={<SignUp />} />
+          <Route path="verify" element={<Verify />} />
+          <Route path="reset" element={<Reset />} />
+          <Route path="outbox" element={<Outbox />} />
           <Route path="steward" element={<Steward />} />
           <Route path="steward/imports/:id" element={<StewardImport />} />
           <Route path="*" element={<NotFound />} />

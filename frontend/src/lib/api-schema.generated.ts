@@ -713,7 +713,7 @@ export interface paths {
         put?: never;
         /**
          * Sign in
-         * @description Sets the session cookie. Ten wrong tries in 15 minutes are answered 429.
+         * @description Sets the session cookie. An account with a second factor is answered `second-factor-needed` until `code` is sent as well. Ten wrong tries in 15 minutes are answered 429.
          *
          *     Anyone; not for API keys.
          *
@@ -742,12 +742,84 @@ export interface paths {
         get?: never;
         put?: never;
         /**
-         * Make an account and sign in
-         * @description Anyone; not for API keys.
+         * Ask for an account
+         * @description A mail goes to the address; its link finishes the account. The answer is the same whether or not the address has an account.
+         *
+         *     Anyone; not for API keys.
          *
          *     Costs nothing.
          */
         post: operations["signUp"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/accounts/verify": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Finish an account by the mail’s link, and sign in
+         * @description Anyone; not for API keys.
+         *
+         *     Costs nothing.
+         */
+        post: operations["verifyAccount"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/password-resets": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Ask for a link to choose a new password
+         * @description The answer is the same whether or not the address has an account.
+         *
+         *     Anyone; not for API keys.
+         *
+         *     Costs nothing.
+         */
+        post: operations["requestPasswordReset"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/password-resets/{token}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Choose a new password by the mail’s link
+         * @description Ends every session of the account. A second factor stays.
+         *
+         *     Anyone; not for API keys.
+         *
+         *     Costs nothing.
+         */
+        post: operations["resetPassword"];
         delete?: never;
         options?: never;
         head?: never;
@@ -770,6 +842,148 @@ export interface paths {
         get: operations["getMe"];
         put?: never;
         post?: never;
+        /**
+         * Delete the account and all that is one’s own
+         * @description Boats, rigs, saved checks and keys go at once. What was published from them stays in the catalog’s history under an id that names nobody any more. The last admin cannot go.
+         *
+         *     Whoever is signed in; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["deleteMe"];
+        options?: never;
+        head?: never;
+        /**
+         * Change one’s name or units
+         * @description Whoever is signed in; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        patch: operations["changeMe"];
+        trace?: never;
+    };
+    "/me/password": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        /**
+         * Choose a new password
+         * @description Ends the account’s other sessions; this one goes on.
+         *
+         *     Whoever is signed in; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        put: operations["changePassword"];
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/export": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Everything kept about the account, as JSON
+         * @description Rows by table, without passwords, keys and other secrets.
+         *
+         *     Whoever is signed in; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["exportMe"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/second-factor": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Whether signing in needs a code
+         * @description Whoever is signed in; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getSecondFactor"];
+        put?: never;
+        /**
+         * Begin a second factor
+         * @description Time-based codes (RFC 6238: SHA-1, 6 digits, 30 s). It takes effect with `confirm`.
+         *
+         *     Whoever is signed in; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["beginSecondFactor"];
+        /**
+         * Remove the second factor
+         * @description Whoever is signed in; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["removeSecondFactor"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/second-factor/confirm": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Put the second factor into effect with its first code
+         * @description Whoever is signed in; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["confirmSecondFactor"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/second-factor/recovery-codes": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Ten new recovery codes; the old ones end
+         * @description Whoever is signed in; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["renewRecoveryCodes"];
         delete?: never;
         options?: never;
         head?: never;
@@ -1406,6 +1620,336 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/users": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * People, by e-mail address
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listUsers"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/users/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One person
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getUser"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        /**
+         * Change a person’s roles, disable or enable the account
+         * @description A disabled account is signed out at once and its keys stop. The last admin keeps the role.
+         *
+         *     Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        patch: operations["changeUser"];
+        trace?: never;
+    };
+    "/users/{id}/sessions": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Where a person is signed in
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listUserSessions"];
+        put?: never;
+        post?: never;
+        /**
+         * Sign a person out everywhere
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["endUserSessions"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/users/{id}/second-factor": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        post?: never;
+        /**
+         * Remove the second factor of a person who lost it
+         * @description Only after making sure by another way that it is the person who asks.
+         *
+         *     Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["removeUserSecondFactor"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/invitations": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Invitations, newest first
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listInvitations"];
+        put?: never;
+        /**
+         * Invite someone by mail
+         * @description The link works once, within seven days. Inviting the same address again replaces the first link.
+         *
+         *     Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["createInvitation"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/invitations/{token}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * What an invitation offers
+         * @description Anyone; not for API keys.
+         *
+         *     Costs nothing.
+         */
+        get: operations["getInvitation"];
+        put?: never;
+        /**
+         * Accept an invitation and be signed in
+         * @description Makes the account; or, for the signed-in account of the same address, adds the roles.
+         *
+         *     Anyone; not for API keys.
+         *
+         *     Costs nothing.
+         */
+        post: operations["acceptInvitation"];
+        /**
+         * Revoke an invitation
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["revokeInvitation"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/audit": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * The audit log, newest first
+         * @description Entries are only ever added. They name people by opaque ids; once a person has left, an id names nobody.
+         *
+         *     Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listAudit"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/audit.csv": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * The audit log as CSV
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["exportAudit"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/mail": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Mails in and through the queue, newest first
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listMails"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/mail/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One mail with its text
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getMail"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/mail/{id}/resend": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Try a mail again that failed or waits
+         * @description Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["resendMail"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/outbox": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Mails of a trial to one address, newest first
+         * @description A trial sends no mail and its passwords are public; where mails are really sent, or in production, nothing is found here.
+         *
+         *     Anyone; not for API keys.
+         *
+         *     Costs nothing.
+         */
+        get: operations["readOutbox"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/health": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * How the site is: room, mails, people, what takes the bytes
+         * @description Figures are at most half a minute old. For a machine that only asks whether the site is up there is `/healthz`.
+         *
+         *     Role admin; not for API keys.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getHealth"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
 }
 export type webhooks = Record<string, never>;
 export interface components {
@@ -1494,7 +2038,7 @@ export interface components {
             /** @description The request’s path and id. */
             instance: string;
             /** @enum {string} */
-            code: "bad-request" | "malformed-json" | "invalid-input" | "unknown-parameter" | "sign-in-needed" | "session-expired" | "wrong-credentials" | "invalid-key" | "token-misplaced" | "not-allowed" | "scope-missing" | "foreign-origin" | "not-found" | "route-not-found" | "method-not-allowed" | "wrong-state" | "email-taken" | "stale-edition" | "already-created" | "idempotency-at-work" | "idempotency-mismatch" | "stale-revision" | "body-too-large" | "unsupported-media-type" | "binary-file" | "wrong-encoding" | "no-header" | "bad-table" | "incomplete-mapping" | "unknown-part" | "too-many-requests" | "internal-error" | "storage-full";
+            code: "bad-request" | "malformed-json" | "invalid-input" | "unknown-parameter" | "sign-in-needed" | "session-expired" | "wrong-credentials" | "second-factor-needed" | "wrong-code" | "invalid-key" | "token-misplaced" | "not-allowed" | "second-factor-required" | "scope-missing" | "foreign-origin" | "not-found" | "route-not-found" | "method-not-allowed" | "wrong-state" | "email-taken" | "stale-edition" | "already-created" | "idempotency-at-work" | "idempotency-mismatch" | "stale-revision" | "link-expired" | "body-too-large" | "unsupported-media-type" | "binary-file" | "wrong-encoding" | "no-header" | "bad-table" | "incomplete-mapping" | "unknown-part" | "too-many-requests" | "internal-error" | "storage-full";
             issues: components["schemas"]["ProblemIssue"][];
         };
         ProblemIssue: {
@@ -3098,6 +3642,13 @@ export interface components {
             /** Format: email */
             email: string;
             password: string;
+            /** @description Of the second factor, where the account has one: six digits, or a recovery code. */
+            code?: string;
+        };
+        MailPromise: {
+            detail: string;
+            /** @description Page where a trial’s mails can be read; null where mails are really sent. */
+            outbox: string | null;
         };
         SignUp: {
             /** Format: email */
@@ -3106,6 +3657,19 @@ export interface components {
             name: string;
             /** @default false */
             integrator: boolean;
+        };
+        Verification: {
+            /** @description From the mail’s link. */
+            token: string;
+            /** @description The one chosen when signing up. */
+            password: string;
+        };
+        ResetRequest: {
+            /** Format: email */
+            email: string;
+        };
+        NewPassword: {
+            password: string;
         };
         Account: {
             id: string;
@@ -3127,6 +3691,54 @@ export interface components {
             secondFactor: boolean;
             /** @description This site asks staff for one; until it is set up, staff work is refused. */
             secondFactorDemanded: boolean;
+        };
+        ProfileChange: {
+            name?: string;
+            units?: components["schemas"]["Units"];
+        };
+        Units: {
+            /** @enum {string} */
+            length: "mm" | "in";
+            /** @enum {string} */
+            speed: "kn" | "km/h" | "mph";
+            /** @enum {string} */
+            mass: "kg" | "lb";
+        };
+        PasswordChange: {
+            /** @description The account’s password as it is. */
+            current: string;
+            password: string;
+        };
+        PersonExport: {
+            [key: string]: {
+                [key: string]: unknown;
+            }[];
+        };
+        PasswordProof: {
+            /** @description The account’s password as it is. */
+            password: string;
+        };
+        SecondFactor: {
+            enabled: boolean;
+            /** Format: date-time */
+            since: string | null;
+            recoveryCodesLeft: number;
+            /** @description This site asks it of whoever does staff work. */
+            demanded: boolean;
+        };
+        BegunSecondFactor: {
+            /** @description Base32, to type into an authenticator by hand; shown once. */
+            secret: string;
+            /** @description The same as an otpauth address, which opens an authenticator on the same device. */
+            uri: string;
+        };
+        RecoveryCodes: {
+            /** @description Each signs in once where the authenticator is lost. Shown once. */
+            codes: string[];
+        };
+        CodeProof: {
+            /** @description Six digits of the authenticator. */
+            code: string;
         };
         Key: {
             id: string;
@@ -3635,6 +4247,155 @@ export interface components {
             };
             /** @description Whether the comma is the decimal mark; found by itself where left out. */
             decimalComma?: boolean;
+        };
+        Person: {
+            id: string;
+            email: string;
+            name: string;
+            roles: components["schemas"]["Role"][];
+            /** Format: date-time */
+            createdAt: string;
+            /** Format: date-time */
+            disabledAt: string | null;
+            secondFactor: boolean;
+            /** @description Devices signed in now. */
+            sessions: number;
+        };
+        PersonChange: {
+            roles?: components["schemas"]["Role"][];
+            /** @description A disabled account is signed out at once and its keys stop. */
+            disabled?: boolean;
+        };
+        PersonSession: {
+            id: string;
+            /** Format: date-time */
+            startedAt: string | null;
+            /** Format: date-time */
+            expiresAt: string;
+        };
+        Invitation: {
+            id: string;
+            email: string;
+            roles: components["schemas"]["Role"][];
+            /** @enum {string} */
+            state: "open" | "accepted" | "revoked" | "expired";
+            /** @description Opaque id. */
+            invitedBy: string;
+            /** Format: date-time */
+            createdAt: string;
+            /** Format: date-time */
+            expiresAt: string;
+        };
+        NewInvitation: {
+            /** Format: email */
+            email: string;
+            roles: components["schemas"]["Role"][];
+        };
+        InvitationOffer: {
+            email: string;
+            roles: components["schemas"]["Role"][];
+            /** Format: date-time */
+            expiresAt: string;
+            /** @description The address has an account: sign in with it to accept. */
+            hasAccount: boolean;
+        };
+        /** @description Name and password of the new account; nothing where the address has one and is signed in. */
+        InvitationAnswer: {
+            name?: string;
+            password?: string;
+        };
+        AuditEntry: {
+            entry: number;
+            /** Format: date-time */
+            at: string;
+            /** @description Opaque id; null for a visitor or the site itself. */
+            actor: string | null;
+            /** @description Null once the person has left. */
+            actorName: string | null;
+            action: string;
+            subject: string | null;
+            detail: {
+                [key: string]: unknown;
+            };
+        };
+        Mail: {
+            id: string;
+            kind: string;
+            to: string;
+            subject: string;
+            /** @enum {string} */
+            status: "queued" | "sending" | "sent" | "failed";
+            attempts: number;
+            /** Format: date-time */
+            nextTryAt: string | null;
+            /** @description What the mail server said last. */
+            problem: string | null;
+            /** Format: date-time */
+            createdAt: string;
+            /** Format: date-time */
+            sentAt: string | null;
+        };
+        MailSheet: {
+            id: string;
+            kind: string;
+            to: string;
+            subject: string;
+            /** @enum {string} */
+            status: "queued" | "sending" | "sent" | "failed";
+            attempts: number;
+            /** Format: date-time */
+            nextTryAt: string | null;
+            /** @description What the mail server said last. */
+            problem: string | null;
+            /** Format: date-time */
+            createdAt: string;
+            /** Format: date-time */
+            sentAt: string | null;
+            /** @description Null once erased, and for a mail whose link opens something, unless it never leaves this machine. */
+            text: string | null;
+        };
+        Health: {
+            /**
+             * @description bad: uploads are refused or mails fail; care: soon.
+             * @enum {string}
+             */
+            status: "good" | "care" | "bad";
+            /** @description What to look after, in sentences. */
+            remarks: string[];
+            /** Format: date-time */
+            startedAt: string;
+            edition: number;
+            disk: {
+                freeBytes: number;
+                totalBytes: number;
+                reserveBytes: number;
+                belowReserve: boolean;
+            };
+            /** @description What takes the room, largest first. */
+            bytes: {
+                kind: string;
+                bytes: number;
+            }[];
+            memoryBytes: number;
+            mails: {
+                queued: number;
+                failed: number;
+                /** Format: date-time */
+                oldestQueuedAt: string | null;
+                leaves: boolean;
+            };
+            people: {
+                accounts: number;
+                disabled: number;
+                sessions: number;
+            };
+            lastTidied: {
+                /** Format: date-time */
+                at: string;
+                removed: {
+                    [key: string]: number;
+                };
+            } | null;
         };
     };
     responses: never;
@@ -5647,7 +6408,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -7199,7 +7960,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `invalid-key`: The API key is not valid. `wrong-credentials`: E-mail address or password is wrong. */
+            /** @description `invalid-key`: The API key is not valid. `wrong-credentials`: E-mail address or password is wrong. `second-factor-needed`: A code is needed as well. `wrong-code`: The code is wrong, or was used before. */
             401: {
                 headers: {
                     [name: string]: unknown;
@@ -7340,15 +8101,15 @@ export interface operations {
             };
         };
         responses: {
-            /** @description The session of the new account. */
-            201: {
+            /** @description A mail is on its way. */
+            202: {
                 headers: {
                     /** @description The caller’s own, or one of ours. */
                     "X-Request-Id"?: string;
                     [name: string]: unknown;
                 };
                 content: {
-                    "application/json": components["schemas"]["Session"];
+                    "application/json": components["schemas"]["MailPromise"];
                 };
             };
             /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
@@ -7378,8 +8139,336 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    verifyAccount: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "token": "of-the-link",
+                 *       "password": "a long enough one"
+                 *     }
+                 */
+                "application/json": components["schemas"]["Verification"];
+            };
+        };
+        responses: {
+            /** @description The session of the new account. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Session"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. `wrong-credentials`: E-mail address or password is wrong. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
             /** @description `email-taken`: An account with this address exists. */
             409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `link-expired`: The link has expired or was used. */
+            410: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    requestPasswordReset: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "email": "customer@tiltwright.example"
+                 *     }
+                 */
+                "application/json": components["schemas"]["ResetRequest"];
+            };
+        };
+        responses: {
+            /** @description A mail is on its way, if the address has an account. */
+            202: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["MailPromise"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    resetPassword: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                token: string;
+            };
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "password": "another long one"
+                 *     }
+                 */
+                "application/json": components["schemas"]["NewPassword"];
+            };
+        };
+        responses: {
+            /** @description The new password holds. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `link-expired`: The link has expired or was used. */
+            410: {
                 headers: {
                     [name: string]: unknown;
                 };
@@ -7487,6 +8576,1019 @@ export interface operations {
             };
             /** @description `not-found`: Nothing is found here. */
             404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    deleteMe: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "password": "loft-floor-2026"
+                 *     }
+                 */
+                "application/json": components["schemas"]["PasswordProof"];
+            };
+        };
+        responses: {
+            /** @description Gone. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. `wrong-credentials`: E-mail address or password is wrong. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    changeMe: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "units": {
+                 *         "length": "in",
+                 *         "speed": "mph",
+                 *         "mass": "lb"
+                 *       }
+                 *     }
+                 */
+                "application/json": components["schemas"]["ProfileChange"];
+            };
+        };
+        responses: {
+            /** @description The account as it is now. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Account"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    changePassword: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "current": "loft-floor-2026",
+                 *       "password": "another long one"
+                 *     }
+                 */
+                "application/json": components["schemas"]["PasswordChange"];
+            };
+        };
+        responses: {
+            /** @description The new password holds. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. `wrong-credentials`: E-mail address or password is wrong. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    exportMe: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The rows. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["PersonExport"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getSecondFactor: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The state of the second factor. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["SecondFactor"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    beginSecondFactor: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description A mark of the caller’s own: the same creation sent again under it within a day happens once. */
+                "Idempotency-Key"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "password": "loft-floor-2026"
+                 *     }
+                 */
+                "application/json": components["schemas"]["PasswordProof"];
+            };
+        };
+        responses: {
+            /** @description The secret, shown once. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["BegunSecondFactor"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. `wrong-credentials`: E-mail address or password is wrong. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `idempotency-at-work`: The first request is still at work. `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `idempotency-mismatch`: The Idempotency-Key stood for another request. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    removeSecondFactor: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "password": "loft-floor-2026"
+                 *     }
+                 */
+                "application/json": components["schemas"]["PasswordProof"];
+            };
+        };
+        responses: {
+            /** @description The password alone signs in again. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. `wrong-credentials`: E-mail address or password is wrong. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    confirmSecondFactor: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "code": "123456"
+                 *     }
+                 */
+                "application/json": components["schemas"]["CodeProof"];
+            };
+        };
+        responses: {
+            /** @description Recovery codes, shown once. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["RecoveryCodes"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. `wrong-code`: The code is wrong, or was used before. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    renewRecoveryCodes: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description A mark of the caller’s own: the same creation sent again under it within a day happens once. */
+                "Idempotency-Key"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "code": "123456"
+                 *     }
+                 */
+                "application/json": components["schemas"]["CodeProof"];
+            };
+        };
+        responses: {
+            /** @description The codes, shown once. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["RecoveryCodes"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. `wrong-code`: The code is wrong, or was used before. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `idempotency-at-work`: The first request is still at work. `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `idempotency-mismatch`: The Idempotency-Key stood for another request. */
+            422: {
                 headers: {
                     [name: string]: unknown;
                 };
@@ -8062,7 +10164,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-allowed`: This role may not do that. */
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -8146,7 +10248,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -8245,7 +10347,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -9976,7 +12078,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-allowed`: This role may not do that. */
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -10076,7 +12178,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -10185,7 +12287,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-allowed`: This role may not do that. */
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -10274,7 +12376,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -10374,7 +12476,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -10483,7 +12585,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -10610,7 +12712,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -10710,7 +12812,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-allowed`: This role may not do that. */
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -10812,7 +12914,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-allowed`: This role may not do that. */
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -10903,7 +13005,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-allowed`: This role may not do that. */
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -11006,7 +13108,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -11135,7 +13237,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -11256,7 +13358,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `not-allowed`: This role may not do that. */
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -11390,7 +13492,7 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"];
                 };
             };
-            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
             403: {
                 headers: {
                     [name: string]: unknown;
@@ -11437,6 +13539,1740 @@ export interface operations {
             };
             /** @description `invalid-input`: A value is missing or not acceptable. `no-header`: The table has no header row. `bad-table`: The table cannot be read. */
             422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listUsers: {
+        parameters: {
+            query?: {
+                /** @description Part of the address or the name. */
+                q?: string;
+                role?: components["schemas"]["Role"];
+                state?: "active" | "disabled";
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of people. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Person"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getUser: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The person. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Person"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    changeUser: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "roles": [
+                 *         "customer",
+                 *         "steward"
+                 *       ]
+                 *     }
+                 */
+                "application/json": components["schemas"]["PersonChange"];
+            };
+        };
+        responses: {
+            /** @description The person as it is now. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Person"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listUserSessions: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The sessions. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["PersonSession"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    endUserSessions: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Signed out. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    removeUserSecondFactor: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Removed; the person is told by mail. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listInvitations: {
+        parameters: {
+            query?: {
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of invitations. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Invitation"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    createInvitation: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description A mark of the caller’s own: the same creation sent again under it within a day happens once. */
+                "Idempotency-Key"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "email": "keeper@tiltwright.example",
+                 *       "roles": [
+                 *         "steward"
+                 *       ]
+                 *     }
+                 */
+                "application/json": components["schemas"]["NewInvitation"];
+            };
+        };
+        responses: {
+            /** @description The invitation. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Invitation"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `idempotency-at-work`: The first request is still at work. `email-taken`: An account with this address exists. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `idempotency-mismatch`: The Idempotency-Key stood for another request. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getInvitation: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                /** @description From the mail’s link. */
+                token: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The offer. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["InvitationOffer"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `link-expired`: The link has expired or was used. */
+            410: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    acceptInvitation: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                /** @description From the mail’s link. */
+                token: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "name": "A keeper",
+                 *       "password": "a long enough one"
+                 *     }
+                 */
+                "application/json": components["schemas"]["InvitationAnswer"];
+            };
+        };
+        responses: {
+            /** @description The session. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Session"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. `sign-in-needed`: Sign in first. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `email-taken`: An account with this address exists. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `link-expired`: The link has expired or was used. */
+            410: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    revokeInvitation: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                /** @description The invitation’s id, from the list. */
+                token: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Its link opens nothing any more. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listAudit: {
+        parameters: {
+            query?: {
+                /** @description Opaque id of who acted. */
+                actor?: string;
+                /** @description Whole, as `session.begin`, or its first word. */
+                action?: string;
+                /** @description Id of what was acted on. */
+                subject?: string;
+                /** @description First day or moment, UTC. */
+                from?: string;
+                /** @description Up to this day or moment, not with it. */
+                to?: string;
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of entries. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["AuditEntry"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    exportAudit: {
+        parameters: {
+            query?: {
+                /** @description Opaque id of who acted. */
+                actor?: string;
+                /** @description Whole, as `session.begin`, or its first word. */
+                action?: string;
+                /** @description Id of what was acted on. */
+                subject?: string;
+                /** @description First day or moment, UTC. */
+                from?: string;
+                /** @description Up to this day or moment, not with it. */
+                to?: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The table, newest first. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "text/csv": string;
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listMails: {
+        parameters: {
+            query?: {
+                status?: "queued" | "sending" | "sent" | "failed";
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of mails. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Mail"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getMail: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The mail. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["MailSheet"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    resendMail: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description It is at the head of the queue. */
+            202: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Mail"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    readOutbox: {
+        parameters: {
+            query: {
+                to: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description At most ten mails. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["MailSheet"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getHealth: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The figures. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Health"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. `second-factor-required`: Staff work here needs a second factor. */
+            403: {
                 headers: {
                     [name: string]: unknown;
                 };

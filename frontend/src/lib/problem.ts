@@ -25,6 +25,9 @@ export class UnexpectedReplyError extends Error {
   }
 }
 
+/** Whether the API answered with this very problem. */
+export const hasCode = (error: unknown, code: Problem['code']): boolean => error instanceof ProblemError && error.problem.code === code;
+
 export type ProblemKind = 'offline' | 'sign-in' | 'not-allowed' | 'not-found' | 'busy' | 'other';
 
 /** How a screen should meet an error. */

@@ -4,15 +4,34 @@ export const roles = ['customer', 'integrator', 'steward', 'admin'] as const;
 export const Role = z.enum(roles).meta({ id: 'Role' });
 export type Role = z.infer<typeof Role>;
 
-const Email = z.email().max(254).toLowerCase();
+export const Email = z.email().max(254).toLowerCase();
 /** 12 characters or more, no other rule (NIST SP 800-63B 5.1.1 advises length over composition). */
-const Password = z.string().min(12, 'at least 12 characters').max(200);
+export const Password = z.string().min(12, 'at least 12 characters').max(200);
 
-export const SignIn = z.strictObject({ email: Email, password: z.string().min(1).max(200) }).meta({ id: 'SignIn' });
+export const PersonName = z
+  .string()
+  .trim()
+  .min(1)
+  .max(80)
+  .refine((name) => !/\p{Cc}/u.test(name), 'must not contain control characters');
+
+export const SignIn = z
+  .strictObject({
+    email: Email,
+    password: z.string().min(1).max(200),
+    code: z
+      .string()
+      .trim()
+      .min(6)
+      .max(40)
+      .optional()
+      .describe('Of the second factor, where the account has one: six digits, or a recovery code.'),
+  })
+  .meta({ id: 'SignIn' });
 export type SignIn = z.infer<typeof SignIn>;
 
 export const SignUp = z
-  .strictObject({ email: Email, password: Password, name: z.string().trim().min(1).max(80), integrator: z.boolean().default(false) })
+  .strictObject({ email: Email, password: Password, name: PersonName, integrator: z.boolean().default(false) })
   .meta({ id: 'SignUp' });
 export type SignUp = z.infer<typeof SignUp>;
 

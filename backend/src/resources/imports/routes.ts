@@ -10,6 +10,7 @@ import type { Deps } from '../../deps.ts';
 import { decodeCursor, listOf, page, pageFields } from '../../http/cursor.ts';
 import { noStore, type Route, route } from '../../http/operation.ts';
 import { parseBody } from '../../http/validate.ts';
+import { demandRoom } from '../../storage/room.ts';
 import { beginCheck } from './check-import.ts';
 import { cancelCheck, discardImport } from './end-import.ts';
 import { beginPublish } from './publish-import.ts';
@@ -49,6 +50,7 @@ export function importRoutes(deps: Deps): Route[] {
         cache,
       },
       async ({ actor, req, res }) => {
+        await demandRoom(config);
         const form = await receive(req, res);
         try {
           const { table, ...choices } = parseBody(UploadFields, form.fields);

@@ -1,6 +1,7 @@
 import { CreatedKey, Key } from '@tiltwright/shared/schemas/account.ts';
 import type supertest from 'supertest';
 import { expect, test } from 'vitest';
+import { newcomer } from '../../../../tests/support/people.ts';
 import { callers, expectProblem, parsed, testApp } from '../../../../tests/support/test-app.ts';
 import { apiKeys } from '../../db/schema/people.ts';
 import { listOf } from '../../http/cursor.ts';
@@ -54,11 +55,7 @@ test('a token in the address or the body is refused, and a server key in a brows
 
 test('another integrator’s key is neither seen nor revoked', async () => {
   const { app, created } = await withKey(['catalog:read']);
-  const other = await app.as('visitor');
-  await other
-    .post('/api/v1/accounts')
-    .send({ email: 'other@tiltwright.example', password: 'twelve or more', name: 'Other', integrator: true })
-    .expect(201);
+  const { agent: other } = await newcomer(app, { email: 'other@tiltwright.example', integrator: true });
   expect((await other.get('/api/v1/me/keys').expect(200)).body.data).toEqual([]);
   expectProblem(await other.delete(`/api/v1/me/keys/${created.id}`), 'not-found');
 });

@@ -1,26 +1,20 @@
-import { Account, Session, SignIn, SignUp } from '@tiltwright/shared/schemas/account.ts';
-import type { Request } from 'express';
+import { Session, SignIn } from '@tiltwright/shared/schemas/account.ts';
+import { beginSession } from '../../auth/begin-session.ts';
 import { cookieName } from '../../auth/identify.ts';
 import { checkPassword } from '../../auth/passwords.ts';
 import { signInThrottle } from '../../auth/throttle.ts';
 import type { Deps } from '../../deps.ts';
 import { ApiProblem } from '../../errors.ts';
 import { noStore, type Route, route } from '../../http/operation.ts';
-import { createAccount } from '../accounts/create-account.ts';
-import { accountOf, findUser, findUserByEmail, type User } from '../accounts/queries.ts';
+import { findUser, findUserByEmail, hasSecondFactor, sessionOf } from '../accounts/queries.ts';
 import { audit } from '../audit.ts';
+import { takeCode } from '../second-factor/take-code.ts';
 
 const tag = 'Accounts';
 
-export function sessionRoutes({ db, config }: Deps): Route[] {
+export function sessionRoutes(deps: Deps): Route[] {
+  const { db } = deps;
   const throttle = signInThrottle();
-
-  const begin = async (req: Request, user: User): Promise<Session> => {
-    // A new session id, so that one planted before signing in is worth nothing.
-    await new Promise<void>((resolve, reject) => req.login({ id: user.id }, (error) => (error ? reject(error) : resolve())));
-    return { account: accountOf({ db, config }, user), expiresAt: new Date(Date.now() + config.sessionMs).toISOString() };
-  };
-
   return [
     route(
       {
@@ -29,12 +23,13 @@ export function sessionRoutes({ db, config }: Deps): Route[] {
         path: '/session',
         tag,
         summary: 'Sign in',
-        description: 'Sets the session cookie. Ten wrong tries in 15 minutes are answered 429.',
+        description:
+          'Sets the session cookie. An account with a second factor is answered `second-factor-needed` until `code` is sent as well. Ten wrong tries in 15 minutes are answered 429.',
         may: 'session.use',
         body: SignIn,
         bodyExample: { email: 'customer@tiltwright.example', password: 'loft-floor-2026' },
         reply: { status: 200, description: 'The session.', schema: Session },
-        problems: ['wrong-credentials', 'too-many-requests'],
+        problems: ['wrong-credentials', 'second-factor-needed', 'wrong-code', 'too-many-requests'],
         cache: noStore,
       },
       async ({ body, req }) => {
@@ -46,9 +41,19 @@ export function sessionRoutes({ db, config }: Deps): Route[] {
           audit(db, user?.id ?? null, 'session.refused', null, { address });
           throw new ApiProblem('wrong-credentials', 'E-mail address or password is wrong.');
         }
-        await throttle.afterSuccess(body.email, address);
+        if (hasSecondFactor(db, user.id)) {
+          if (body.code === undefined)
+            throw new ApiProblem('second-factor-needed', 'Send the code of the account’s authenticator as well, or a recovery code.');
+          await throttle.beforeCode(user.id);
+          if (!takeCode(deps, user, body.code)) {
+            audit(db, user.id, 'session.refused', null, { address, code: true });
+            throw new ApiProblem('wrong-code', 'The code is wrong or was used before; wait for the next one.');
+          }
+        }
+        await throttle.afterSuccess(body.email, address, user.id);
         audit(db, user.id, 'session.begin', null, { address });
-        return begin(req, user);
+        await beginSession(req, user.id);
+        return sessionOf(deps, user);
       },
     ),
     route(
@@ -62,12 +67,9 @@ export function sessionRoutes({ db, config }: Deps): Route[] {
         reply: { status: 200, description: 'The session; `account` is null for a visitor.', schema: Session },
         cache: noStore,
       },
-      ({ actor }) => {
+      ({ actor }): Session => {
         const user = actor.kind === 'person' ? findUser(db, actor.userId) : undefined;
-        return {
-          account: user ? accountOf({ db, config }, user) : null,
-          expiresAt: user ? new Date(Date.now() + config.sessionMs).toISOString() : null,
-        };
+        return user ? sessionOf(deps, user) : { account: null, expiresAt: null };
       },
     ),
     route(
@@ -85,49 +87,6 @@ export function sessionRoutes({ db, config }: Deps): Route[] {
         if (actor.kind === 'person') audit(db, actor.userId, 'session.end', null);
         await new Promise<void>((resolve) => (req.session ? req.session.destroy(() => resolve()) : resolve()));
         res.clearCookie(cookieName);
-      },
-    ),
-    route(
-      {
-        id: 'signUp',
-        method: 'post',
-        path: '/accounts',
-        tag,
-        summary: 'Make an account and sign in',
-        may: 'session.use',
-        body: SignUp,
-        bodyExample: { email: 'skipper@tiltwright.example', password: 'a long enough one', name: 'A skipper' },
-        reply: { status: 201, description: 'The session of the new account.', schema: Session },
-        problems: ['email-taken', 'too-many-requests'],
-        cache: noStore,
-      },
-      async ({ body, req }) => {
-        await throttle.beforeTry('new account', req.ip ?? '');
-        const user = await createAccount(db, {
-          email: body.email,
-          name: body.name,
-          password: body.password,
-          roles: body.integrator ? ['customer', 'integrator'] : ['customer'],
-        });
-        return begin(req, user);
-      },
-    ),
-    route(
-      {
-        id: 'getMe',
-        method: 'get',
-        path: '/me',
-        tag,
-        summary: 'The account that is signed in',
-        may: 'account.own',
-        reply: { status: 200, description: 'The account.', schema: Account },
-        problems: ['not-found'],
-        cache: noStore,
-      },
-      ({ actor }) => {
-        const user = actor.kind === 'visitor' ? undefined : findUser(db, actor.userId);
-        if (!user) throw new ApiProblem('not-found', 'This account is gone.');
-        return accountOf({ db, config }, user);
       },
     ),
   ];

@@ -1,5 +1,5 @@
-import { Account, Session } from '@tiltwright/shared/schemas/account.ts';
-import { describe, expect, test } from 'vitest';
+import { Session } from '@tiltwright/shared/schemas/account.ts';
+import { expect, test } from 'vitest';
 import { callers, expectProblem, parsed, testApp } from '../../../../tests/support/test-app.ts';
 import { auditLog, sessions, users } from '../../db/schema/people.ts';
 import { demoPassword } from '../../db/seed.ts';
@@ -62,48 +62,6 @@ test('a disabled account is out at once', async () => {
   app.db.update(users).set({ disabledAt: new Date().toISOString() }).run();
   expect((await agent.get('/api/v1/me')).status).toBe(401);
   expectProblem(await agent.post('/api/v1/session').send(credentials), 'wrong-credentials');
-});
-
-describe('signing up', () => {
-  const skipper = { email: 'Skipper@Tiltwright.Example', password: 'twelve or more', name: 'A skipper' };
-
-  test('makes a customer and signs in; the address is kept in lower case', async () => {
-    const app = testApp();
-    const agent = await app.as('visitor');
-    const { account } = parsed(Session, await agent.post('/api/v1/accounts').send(skipper).expect(201));
-    expect(account).toMatchObject({ email: 'skipper@tiltwright.example', roles: ['customer'] });
-    expect(parsed(Account, await agent.get('/api/v1/me').expect(200)).id).toBe(account!.id);
-    const stored = app.db
-      .select()
-      .from(users)
-      .all()
-      .find((user) => user.id === account!.id)!;
-    expect(stored.passwordHash).toMatch(/^\$argon2id\$/);
-    expect(JSON.stringify(app.db.select().from(auditLog).all())).not.toContain(skipper.password);
-  });
-
-  test('roles beyond customer and integrator cannot be chosen', async () => {
-    const agent = await testApp().as('visitor');
-    expectProblem(await agent.post('/api/v1/accounts').send({ ...skipper, roles: ['admin'] }), 'invalid-input');
-    const { account } = parsed(
-      Session,
-      await agent
-        .post('/api/v1/accounts')
-        .send({ ...skipper, integrator: true })
-        .expect(201),
-    );
-    expect(account!.roles).toEqual(['customer', 'integrator']);
-  });
-
-  test('a short password and a taken address are refused beside the field', async () => {
-    const agent = await testApp().as('visitor');
-    expect(
-      expectProblem(await agent.post('/api/v1/accounts').send({ ...skipper, password: 'short' }), 'invalid-input').issues[0]!.path,
-    ).toBe('/password');
-    expect(
-      expectProblem(await agent.post('/api/v1/accounts').send({ ...skipper, email: credentials.email }), 'email-taken').issues[0]!.path,
-    ).toBe('/email');
-  });
 });
 
 test('the audit log cannot be rewritten', () => {

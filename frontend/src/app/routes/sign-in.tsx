@@ -13,6 +13,9 @@ export default function SignIn() {
       <p className="text-ink-2">Looking up boats and checking a fit needs no account. With one you keep boats and checks.</p>
       <SignInForm onSignedIn={() => void navigate(safeNext(next), { replace: true })} />
       <p>
+        Password lost? <Link to={paths.reset}>Choose a new one</Link>
+      </p>
+      <p>
         No account yet? <Link to={`${paths.signUp}${next ? `?next=${encodeURIComponent(next)}` : ''}`}>Make one</Link>
       </p>
     </div>

@@ -1,17 +1,13 @@
-import { useMutation, useQueryClient } from '@tanstack/react-query';
-import type { Session, SignUp } from '@tiltwright/shared/schemas/account.ts';
+import { useMutation } from '@tanstack/react-query';
+import type { MailPromise } from '@tiltwright/shared/schemas/access.ts';
+import type { SignUp } from '@tiltwright/shared/schemas/account.ts';
 import { api, bodyOf } from '../../../lib/api-client.ts';
-import { become } from './become.ts';
 
-function createAccount(body: SignUp): Promise<Session> {
+export function createAccount(body: SignUp): Promise<MailPromise> {
   return bodyOf(api.POST('/accounts', { body }));
 }
 
-/** Makes an account; the answer is its first session, so nobody types the password twice. */
+/** Asks for an account; what comes next is in the mail, and the answer does not tell whether there is an account already. */
 export function useCreateAccount() {
-  const client = useQueryClient();
-  return useMutation({
-    mutationFn: createAccount,
-    onSuccess: (session) => become(client, session),
-  });
+  return useMutation({ mutationFn: createAccount });
 }

@@ -1,4 +1,5 @@
 import { zodResolver } from '@hookform/resolvers/zod';
+import type { MailPromise } from '@tiltwright/shared/schemas/access.ts';
 import { SignUp } from '@tiltwright/shared/schemas/account.ts';
 import { type FieldError, type FieldPath, useForm } from 'react-hook-form';
 import { Button } from '../../../components/ui/button.tsx';
@@ -10,8 +11,8 @@ import { useCreateAccount } from '../api/create-account.ts';
 type Values = { name: string; email: string; password: string; integrator: boolean };
 const fields: readonly FieldPath<Values>[] = ['name', 'email', 'password', 'integrator'];
 
-/** Makes an account and is signed in with it; one schema for this form and the server. */
-export function SignUpForm({ onSignedUp }: { onSignedUp: () => void }) {
+/** Asks for an account; one schema for this form and the server. */
+export function SignUpForm({ onAsked }: { onAsked: (promise: MailPromise) => void }) {
   const create = useCreateAccount();
   const { register, handleSubmit, formState, setError } = useForm({
     resolver: zodResolver(SignUp),
@@ -21,16 +22,8 @@ export function SignUpForm({ onSignedUp }: { onSignedUp: () => void }) {
 
   const send = handleSubmit(async ({ email, password, name, integrator }) => {
     try {
-      await create.mutateAsync({ email, password, name, integrator });
-      onSignedUp();
+      onAsked(await create.mutateAsync({ email, password, name, integrator }));
     } catch (error) {
-      if (error instanceof ProblemError && error.problem.code === 'email-taken') {
-        setError(
-          'email',
-          { type: 'server', message: 'An account with this address exists. Sign in with it instead.' },
-          { shouldFocus: true },
-        );
-      }
       for (const issue of problemIssues(error)) {
         const field = fields.find((name) => issue.path === `/${name}`);
         if (field) setError(field, { type: 'server', message: issue.message }, { shouldFocus: true });
@@ -38,8 +31,7 @@ export function SignUpForm({ onSignedUp }: { onSignedUp: () => void }) {
     }
   });
 
-  const shown =
-    create.error instanceof ProblemError && (create.error.problem.code === 'email-taken' || create.error.problem.issues.length > 0);
+  const shown = create.error instanceof ProblemError && create.error.problem.issues.length > 0;
   return (
     <form onSubmit={(event) => void send(event)} noValidate className="flex flex-col gap-4">
       {create.isError && !shown && <Failure error={create.error} what="make the account" />}
