@@ -7,8 +7,9 @@ import { databaseFile } from '../../backend/src/db/connect.ts';
 import { topFolder } from '../../backend/src/paths.ts';
 import type { Import } from '../../shared/src/schemas/import.ts';
 import type { Problem } from '../../shared/src/schemas/problem.ts';
-import { dataFolder, type Person, signedIn, startServer } from '../support/built-server.ts';
+import { dataFolder, startServer } from '../support/built-server.ts';
 import { manyHulls } from '../support/many-hulls.ts';
+import { type Person, signedIn } from '../support/signed-in.ts';
 
 const rows = 20_000;
 
