@@ -63,6 +63,11 @@ const Settings = z.object({
   LIMIT_ACCOUNT: limit(600).describe('Units a minute for an account.'),
   LIMIT_KEY: limit(6000).describe('Units a minute for an API key.'),
   LIMIT_KEY_DAY: limit(500_000).describe('Units a day for an API key.'),
+  WEBHOOK_PRIVATE_TARGETS: z
+    .enum(['true', 'false'])
+    .default('false')
+    .describe('true: webhooks may point to this machine and its network, for trials; refused in production.'),
+  KEEP_DELIVERIES_DAYS: z.coerce.number().min(1).default(30).describe('Deliveries of webhooks are kept this long.'),
   FIT_THREADS: z.coerce
     .number()
     .int()
@@ -96,6 +101,8 @@ export interface Config {
   keepAuditYears: number;
   tidyHour: number;
   fitThreads: number;
+  webhookPrivateTargets: boolean;
+  keepDeliveriesDays: number;
   /** Units a minute, and for keys also a day; what a kind of caller has until an admin says otherwise. */
   limits: { anonymous: number; page: number; account: number; key: number; keyDay: number };
 }
@@ -119,6 +126,8 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
   const production = settings.NODE_ENV === 'production';
   if (production && !settings.SESSION_SECRET)
     throw new StartProblem('In production SESSION_SECRET has to be set, to 32 characters or more.');
+  if (production && settings.WEBHOOK_PRIVATE_TARGETS === 'true')
+    throw new StartProblem('In production WEBHOOK_PRIVATE_TARGETS cannot be true: webhooks could reach into your own network.');
   if (production && settings.SMTP_URL && !settings.SITE_URL)
     throw new StartProblem('In production SITE_URL has to be set where SMTP_URL is: links in mails begin with it.');
   return {
@@ -143,6 +152,8 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     keepAuditYears: settings.KEEP_AUDIT_YEARS,
     tidyHour: settings.TIDY_HOUR,
     fitThreads: settings.FIT_THREADS,
+    webhookPrivateTargets: settings.WEBHOOK_PRIVATE_TARGETS === 'true',
+    keepDeliveriesDays: settings.KEEP_DELIVERIES_DAYS,
     limits: {
       anonymous: settings.LIMIT_ANONYMOUS,
       page: settings.LIMIT_PAGE,

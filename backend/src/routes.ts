@@ -25,6 +25,7 @@ import { secondFactorRoutes } from './resources/second-factor/routes.ts';
 import { sessionRoutes } from './resources/session/routes.ts';
 import { shareRoutes } from './resources/shares/routes.ts';
 import { usageRoutes } from './resources/usage/routes.ts';
+import { webhookRoutes } from './resources/webhooks/routes.ts';
 import { userRoutes } from './resources/users/routes.ts';
 
 /** Everything the API can do. */
@@ -45,6 +46,7 @@ export function allRoutes(deps: Deps): Route[] {
     ...secondFactorRoutes(deps),
     ...keyRoutes(deps),
     ...usageRoutes(deps),
+    ...webhookRoutes(deps),
     ...limitRoutes(deps),
     ...boatRoutes(deps),
     ...fitRoutes(deps),

@@ -21,6 +21,7 @@ import { recoverImports } from './resources/imports/recover-imports.ts';
 import { startNightly } from './resources/retention/nightly.ts';
 import { flushEveryMs } from './resources/usage/usage-counter.ts';
 import { StartProblem } from './start-problem.ts';
+import { startWebhookWorker } from './webhooks/webhook-worker.ts';
 
 /** Open requests get this long to end when the server is told to stop. */
 const patienceMs = 5000;
@@ -35,6 +36,7 @@ async function start(): Promise<void> {
   const flushing = setInterval(() => {
     if (!deps.jobs.isWriting()) deps.usage.flush();
   }, flushEveryMs).unref();
+  const stopWebhooks = startWebhookWorker(db, config, logger, () => !deps.jobs.isWriting());
   const app = createApp(deps, logger);
   const server = await listen(app.listen.bind(app), config);
   const { port } = server.address() as AddressInfo;
@@ -44,6 +46,7 @@ async function start(): Promise<void> {
   const stopNightly = startNightly(deps, logger);
   stopOnSignal(server, async () => {
     clearInterval(flushing);
+    await stopWebhooks();
     await Promise.all([stopMail(), stopNightly()]);
     await deps.jobs.close();
     await deps.pool.close();

@@ -9,6 +9,7 @@ export type MailKind =
   | 'second-factor-changed'
   | 'invitation'
   | 'storage-low'
+  | 'webhook-disabled'
   | 'notice';
 
 export interface Letter extends MailBody {
@@ -94,4 +95,12 @@ export const storageLow = (freeMb: number, reserveMb: number, healthUrl: string)
     'Uploads and imports are refused until there is room again. Reading, checking fits and signing in go on.',
   ],
   link: { label: 'What takes the room', url: healthUrl },
+});
+
+export const webhookDisabled = (name: string, why: string, url: string): Letter => ({
+  kind: 'webhook-disabled',
+  secret: false,
+  subject: 'Tiltwright: a webhook was disabled',
+  paragraphs: [`Your webhook “${name}” gets no more messages. ${why}`, 'What it missed stays in its delivery log for 30 days.'],
+  link: { label: 'Look at it and take it up again', url },
 });

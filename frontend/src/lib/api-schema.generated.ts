@@ -1090,6 +1090,162 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/me/webhooks": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * The account’s webhooks
+         * @description Role integrator; a key needs the scope `webhooks:manage`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listWebhooks"];
+        put?: never;
+        /**
+         * Be told of what happens
+         * @description Messages follow the Standard Webhooks specification: `webhook-id`, `webhook-timestamp` and `webhook-signature` (v1, HMAC-SHA256). Any answer of 200 to 299 within five seconds counts as received; else it is tried again for some three days, then the webhook is disabled and its owner told by mail. Redirects are not followed; addresses of private networks are refused.
+         *
+         *     Role integrator; a key needs the scope `webhooks:manage`.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["createWebhook"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/webhooks/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * One webhook
+         * @description Role integrator; a key needs the scope `webhooks:manage`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["getWebhook"];
+        put?: never;
+        post?: never;
+        /**
+         * Delete a webhook and its delivery log
+         * @description Role integrator; a key needs the scope `webhooks:manage`.
+         *
+         *     Costs 1 unit.
+         */
+        delete: operations["deleteWebhook"];
+        options?: never;
+        head?: never;
+        /**
+         * Change a webhook, or take a disabled one up again
+         * @description Role integrator; a key needs the scope `webhooks:manage`.
+         *
+         *     Costs 1 unit.
+         */
+        patch: operations["changeWebhook"];
+        trace?: never;
+    };
+    "/me/webhooks/{id}/rotate": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Give a webhook a new secret
+         * @description For the overlap each delivery carries both signatures.
+         *
+         *     Role integrator; a key needs the scope `webhooks:manage`.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["rotateWebhookSecret"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/webhooks/{id}/test": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Send a message of the type webhook.test
+         * @description Role integrator; a key needs the scope `webhooks:manage`.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["testWebhook"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/webhooks/{id}/deliveries": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * What a webhook was sent, newest first
+         * @description Role integrator; a key needs the scope `webhooks:manage`.
+         *
+         *     Costs 1 unit.
+         */
+        get: operations["listDeliveries"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/me/webhooks/{id}/deliveries/{delivery}/replay": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Send a delivery once more
+         * @description The same message under the same `webhook-id`.
+         *
+         *     Role integrator; a key needs the scope `webhooks:manage`.
+         *
+         *     Costs 1 unit.
+         */
+        post: operations["replayDelivery"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
     "/limits": {
         parameters: {
             query?: never;
@@ -3824,6 +3980,82 @@ export interface components {
             units: number;
             /** @description Of the requests, those answered 429. */
             refused: number;
+        };
+        Webhook: {
+            id: string;
+            url: string;
+            name: string;
+            topics: components["schemas"]["WebhookTopic"][];
+            /** Format: date-time */
+            disabledAt: string | null;
+            disabledWhy: string | null;
+            /**
+             * Format: date-time
+             * @description Until then deliveries are signed with the secret before the last rotation too.
+             */
+            previousUntil: string | null;
+            revision: number;
+            /** Format: date-time */
+            createdAt: string;
+        };
+        /**
+         * @description edition.published: the catalog has a new edition. hull.changed, hull.superseded: one hull; left out one by one where an edition changes more than 500. correction.decided: one of the account’s own corrections.
+         * @enum {string}
+         */
+        WebhookTopic: "edition.published" | "hull.changed" | "hull.superseded" | "correction.decided";
+        CreatedWebhook: {
+            id: string;
+            url: string;
+            name: string;
+            topics: components["schemas"]["WebhookTopic"][];
+            /** Format: date-time */
+            disabledAt: string | null;
+            disabledWhy: string | null;
+            /**
+             * Format: date-time
+             * @description Until then deliveries are signed with the secret before the last rotation too.
+             */
+            previousUntil: string | null;
+            revision: number;
+            /** Format: date-time */
+            createdAt: string;
+            /** @description `whsec_…`, shown once. */
+            secret: string;
+        };
+        NewWebhook: {
+            /** Format: uri */
+            url: string;
+            name: string;
+            topics: components["schemas"]["WebhookTopic"][];
+        };
+        WebhookChange: {
+            /** Format: uri */
+            url?: string;
+            name?: string;
+            topics?: components["schemas"]["WebhookTopic"][];
+            /** @description true takes up again a webhook that was disabled. */
+            enabled?: boolean;
+        };
+        Delivery: {
+            id: string;
+            /** @description The `webhook-id` header; the same for every try. */
+            messageId: string;
+            topic: string;
+            /** @enum {string} */
+            status: "waiting" | "sending" | "delivered" | "failed";
+            tries: number;
+            /** Format: date-time */
+            nextTryAt: string | null;
+            /** Format: date-time */
+            lastTryAt: string | null;
+            /** @description HTTP status of the last answer; null where none came. */
+            lastStatus: number | null;
+            lastError: string | null;
+            lastMs: number | null;
+            /** @description What is sent, byte for byte. */
+            body: string;
+            /** Format: date-time */
+            createdAt: string;
         };
         Limit: {
             caller: components["schemas"]["LimitedCaller"];
@@ -10082,6 +10314,973 @@ export interface operations {
             };
             /** @description `not-allowed`: This role may not do that. */
             403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listWebhooks: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The webhooks without their secrets. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Webhook"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    createWebhook: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description A mark of the caller’s own: the same creation sent again under it within a day happens once. */
+                "Idempotency-Key"?: string;
+            };
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "url": "https://shop.example/tiltwright",
+                 *       "name": "Stock",
+                 *       "topics": [
+                 *         "edition.published"
+                 *       ]
+                 *     }
+                 */
+                "application/json": components["schemas"]["NewWebhook"];
+            };
+        };
+        responses: {
+            /** @description The webhook; its secret is shown once. */
+            201: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["CreatedWebhook"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `idempotency-at-work`: The first request is still at work. `already-created`: This was made already. `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. `idempotency-mismatch`: The Idempotency-Key stood for another request. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    getWebhook: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag the caller has; 304 where it is still the present one. */
+                "If-None-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The webhook. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Webhook"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    deleteWebhook: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag it was changed from; 412 where it has changed since. */
+                "If-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description It is gone. */
+            204: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-revision`: It has changed meanwhile. */
+            412: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    changeWebhook: {
+        parameters: {
+            query?: never;
+            header?: {
+                /** @description ETag it was changed from; 412 where it has changed since. */
+                "If-Match"?: string;
+            };
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "enabled": true
+                 *     }
+                 */
+                "application/json": components["schemas"]["WebhookChange"];
+            };
+        };
+        responses: {
+            /** @description The webhook as it is now. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    /** @description Version of the answer. */
+                    ETag?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Webhook"];
+                };
+            };
+            /** @description The caller has the present version. */
+            304: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `stale-revision`: It has changed meanwhile. */
+            412: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    rotateWebhookSecret: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: {
+            content: {
+                /**
+                 * @example {
+                 *       "overlapHours": 24
+                 *     }
+                 */
+                "application/json": components["schemas"]["Rotation"];
+            };
+        };
+        responses: {
+            /** @description The webhook with its new secret, shown once. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["CreatedWebhook"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. `malformed-json`: The body is not valid JSON. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `body-too-large`: The body is too large. */
+            413: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `unsupported-media-type`: This kind of body is not taken here. */
+            415: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    testWebhook: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Its delivery; how it went is in the delivery log. */
+            202: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Delivery"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    listDeliveries: {
+        parameters: {
+            query?: {
+                /** @description Rows a page, at most 200. */
+                limit?: number;
+                /** @description `next` of the page before. */
+                cursor?: string;
+            };
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description A page of deliveries. */
+            200: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        data: components["schemas"]["Delivery"][];
+                        /** @description Cursor of the next page; null on the last. */
+                        next: string | null;
+                    };
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `invalid-input`: A value is missing or not acceptable. */
+            422: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `too-many-requests`: Too many requests. */
+            429: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `internal-error`: Something went wrong on our side. */
+            500: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+        };
+    };
+    replayDelivery: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+                delivery: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The delivery, on its way again. */
+            202: {
+                headers: {
+                    /** @description The caller’s own, or one of ours. */
+                    "X-Request-Id"?: string;
+                    /** @description What is left, by the IETF’s RateLimit header fields: r units for t seconds. */
+                    RateLimit?: string;
+                    /** @description The limit: q units in w seconds. */
+                    "RateLimit-Policy"?: string;
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["Delivery"];
+                };
+            };
+            /** @description `bad-request`: The request is not understood. `unknown-parameter`: A query parameter is not known here. */
+            400: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `sign-in-needed`: Sign in first. `session-expired`: The session has ended. `invalid-key`: The API key is not valid. */
+            401: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `foreign-origin`: Writes from another site are refused. `not-allowed`: This role may not do that. */
+            403: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `not-found`: Nothing is found here. */
+            404: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"];
+                };
+            };
+            /** @description `wrong-state`: The state of this thing does not allow that. */
+            409: {
                 headers: {
                     [name: string]: unknown;
                 };
