@@ -45,41 +45,52 @@ interface SheetPass {
   seen: SeenSolid;
   distanceM: number;
   /** Where the sheet comes nearest: depression, place along the aperture, distance along the ray. */
-  depressionRad: number;
+  cos: number;
+  sin: number;
   startM: number;
   alongM: number;
 }
 
 /**
  * Nearest approach of the whole sheet of rays (aperture × fan × 5 m), which is convex, to a convex solid: each point in turn moves to
- * the nearest one of the other body (alternating projections, Cheney & Goldstein 1959), to about a thousandth of a millimetre.
+ * the nearest one of the other body (alternating projections, Cheney & Goldstein 1959), until a step gains less than a thousandth of
+ * a millimetre.
  */
 function nearestOfSheet(seen: SeenSolid, element: SideElement, fan: Fan, side: Side): SheetPass {
   const { turn, face } = seen;
   const shape = seen.solid.shape as Exclude<Shape, Prism>;
   const sign = side === 'starboard' ? 1 : -1;
   const halfStart = cellOffsetM(apertureCells - 1, element.apertureM);
-  const from = fan.depressionsRad[0] as number;
-  const to = fan.depressionsRad[fan.depressionsRad.length - 1] as number;
+  const last = fan.depressionsRad.length - 1;
+  const [cosFrom, sinFrom] = [fan.cosines[0] as number, fan.sines[0] as number];
+  const [cosTo, sinTo] = [fan.cosines[last] as number, fan.sines[last] as number];
   const p = new Float64Array(3);
-  const pass: SheetPass = { seen, distanceM: Number.POSITIVE_INFINITY, depressionRad: from, startM: 0, alongM: 0 };
-  for (let i = 0; i < 200; i++) {
+  const pass: SheetPass = { seen, distanceM: Number.POSITIVE_INFINITY, cos: cosFrom, sin: sinFrom, startM: 0, alongM: 0 };
+  for (let i = 0; i < 100; i++) {
     toSensor(turn, face, p);
     const x = p[0] as number;
     const y = sign * (p[1] as number);
     const z = p[2] as number;
-    const angle = Math.min(to, Math.max(from, Math.atan2(z, y)));
-    const cos = Math.cos(angle);
-    const sin = Math.sin(angle);
+    // Toward the point, or along the nearer edge of the fan.
+    const above = y * sinFrom - z * cosFrom > 0;
+    const below = z * cosTo - y * sinTo > 0;
+    const away = Math.sqrt(y * y + z * z);
+    const edge = above && (!below || y * cosFrom + z * sinFrom > y * cosTo + z * sinTo);
+    const cos = edge || away === 0 ? cosFrom : below ? cosTo : y / away;
+    const sin = edge || away === 0 ? sinFrom : below ? sinTo : z / away;
     const along = Math.min(reachM, Math.max(0, y * cos + z * sin));
     const start = Math.min(halfStart, Math.max(-halfStart, x));
-    const distance = Math.hypot(x - start, y - along * cos, z - along * sin);
+    const offX = x - start;
+    const offY = y - along * cos;
+    const offZ = z - along * sin;
+    const distance = Math.sqrt(offX * offX + offY * offY + offZ * offZ);
     const gained = pass.distanceM - distance;
-    pass.depressionRad = angle;
+    pass.cos = cos;
+    pass.sin = sin;
     pass.startM = start;
     pass.alongM = along;
     pass.distanceM = distance;
-    if (i > 0 && gained < 1e-7) break;
+    if (i > 0 && gained < 1e-6) break;
     p[0] = start;
     p[1] = sign * along * cos;
     p[2] = along * sin;
@@ -110,11 +121,13 @@ function toSolid(turn: Rotation3, face: Vec3, p: Float64Array): void {
 /** The nearest single ray: those next to where the sheet comes nearest, in all three along-track directions. */
 function nearestOfRays(sheet: SheetPass, element: SideElement, fan: Fan, side: Side): NearestPass {
   const last = fan.depressionsRad.length - 1;
-  const step = Math.floor((sheet.depressionRad - (fan.depressionsRad[0] as number)) / fan.stepRad);
+  const step = Math.floor((Math.atan2(sheet.sin, sheet.cos) - (fan.depressionsRad[0] as number)) / fan.stepRad);
   const cell = Math.round((sheet.startM / element.apertureM) * apertureCells + (apertureCells - 1) / 2);
   const half = element.alongTrackWidthRad / 2;
   let best: NearestPass = { clearanceM: Number.POSITIVE_INFINITY, alongM: 0 };
-  for (let i = Math.max(0, step - 1); i <= Math.min(last, step + 2); i++) {
+  // From its very start, every direction is as near as any other.
+  const [first, final] = sheet.alongM === 0 ? [step, step] : [Math.max(0, step - 1), Math.min(last, step + 2)];
+  for (let i = first; i <= final; i++) {
     for (let way = -1; way <= 1; way++) {
       const direction = rayDirection(side, fan.depressionsRad[i] as number, way * half);
       for (let j = Math.max(0, cell - 1); j <= Math.min(apertureCells - 1, cell + 1); j++) {

@@ -18,7 +18,7 @@ export function moveOnto(shape: Exclude<Shape, Prism>, p: Float64Array): void {
       break;
     case 'capsule': {
       const axis = clamp(x, shape.halfAxisM);
-      const away = Math.hypot(x - axis, y, z);
+      const away = Math.sqrt((x - axis) * (x - axis) + y * y + z * z);
       const share = away > shape.radiusM ? shape.radiusM / away : 1;
       p[0] = axis + share * (x - axis);
       p[1] = share * y;
@@ -35,7 +35,7 @@ export function moveOnto(shape: Exclude<Shape, Prism>, p: Float64Array): void {
       break;
     }
     case 'prop-disc': {
-      const away = Math.hypot(y, z);
+      const away = Math.sqrt(y * y + z * z);
       const share = away > shape.radiusM ? shape.radiusM / away : 1;
       p[0] = clamp(x, shape.halfDepthM);
       p[1] = share * y;
