@@ -2,6 +2,7 @@
 import { cpus } from 'node:os';
 import { fanOf } from '@tiltwright/shared/engine/beams/fan.ts';
 import { sideClearance } from '@tiltwright/shared/engine/beams/occlusion.ts';
+import { seenAll } from '@tiltwright/shared/engine/beams/seen-solid.ts';
 import { slabShare } from '@tiltwright/shared/engine/beams/slab.ts';
 import { cellOffsetM, rayDirection } from '@tiltwright/shared/engine/beams/slab-runs.ts';
 import { toBoat } from '@tiltwright/shared/engine/frames.ts';
@@ -94,8 +95,8 @@ function rays(): void {
   const fan = fanOf(element);
   const count = 2 * fan.depressionsRad.length * 17 * 3;
   const own = rate(() => {
-    slabShare(closed, sensor, element, fan, 'port');
-    slabShare(closed, sensor, element, fan, 'starboard');
+    slabShare(seenAll(sensor, closed), element, fan, 'port');
+    slabShare(seenAll(sensor, closed), element, fan, 'starboard');
   });
   const trees = closed.map((solid) => new MeshBVH(meshOf(solid)));
   const list: three.Ray[] = [];

@@ -10,7 +10,7 @@ import { createApp } from '../../backend/src/app.ts';
 import { type Config, readConfig } from '../../backend/src/config.ts';
 import { connect, type Db, databaseFile } from '../../backend/src/db/connect.ts';
 import { demoPassword } from '../../backend/src/db/seed.ts';
-import { createDeps } from '../../backend/src/deps.ts';
+import { createDeps, type Deps } from '../../backend/src/deps.ts';
 import { Problem, type ProblemCode } from '../../shared/src/schemas/problem.ts';
 
 declare module 'vitest' {
@@ -24,6 +24,7 @@ export type Caller = (typeof callers)[number];
 
 export interface TestApp {
   db: Db;
+  deps: Deps;
   config: Config;
   /** Someone with a cookie jar of their own. */
   as(caller: Caller): Promise<TestAgent>;
@@ -52,6 +53,7 @@ function serving(db: Db, config: Config): TestApp {
   const app = createApp(deps);
   return {
     db,
+    deps,
     config,
     again() {
       deps.usage.flush();

@@ -1,5 +1,6 @@
 // Where else could it go? Clear shares over a grid of places, and the best distinct ones.
 import { fanOf, type Side } from './beams/fan.ts';
+import { seenAll } from './beams/seen-solid.ts';
 import { slabShare } from './beams/slab.ts';
 import type { HullShape } from './hull.ts';
 import { type SensorSetting, type SideElement, sensorPose } from './sensor.ts';
@@ -37,8 +38,8 @@ export function placementMap(
   for (const offsetM of grid.offsetsM) {
     for (const dropM of grid.dropsM) {
       for (const tiltRad of grid.tiltsRad) {
-        const sensor = sensorPose(hull, { ...setting, offsetM, dropM, tiltRad });
-        const share = (side: Side) => slabShare(solids, sensor, element, fan, side);
+        const seen = seenAll(sensorPose(hull, { ...setting, offsetM, dropM, tiltRad }), solids);
+        const share = (side: Side) => slabShare(seen, element, fan, side);
         port[at] = share('port');
         starboard[at] = share('starboard');
         at++;

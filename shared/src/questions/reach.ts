@@ -1,5 +1,6 @@
 // What other settings within reach would do for a wanted side: motor trims under power, tilts of the bracket.
 import { fanOf, type Side } from '../engine/beams/fan.ts';
+import { seenAll } from '../engine/beams/seen-solid.ts';
 import { slabShare } from '../engine/beams/slab.ts';
 import { motorTrimReach } from '../engine/lower-unit.ts';
 import { clearFrom, shadedFrom } from '../engine/thresholds.ts';
@@ -43,8 +44,10 @@ export function reachOf(
   const fan = fanOf(element);
   const opennessWith = (numbers: FitNumbers) => {
     const { solids, poseAt } = sceneOf(p, numbers);
-    return (tiltDeg: number, enough: number) =>
-      Math.min(...wanted.map((side) => slabShare(solids, poseAt(degToRad(tiltDeg)), element, fan, side, enough)));
+    return (tiltDeg: number, enough: number) => {
+      const seen = seenAll(poseAt(degToRad(tiltDeg)), solids);
+      return Math.min(...wanted.map((side) => slabShare(seen, element, fan, side, enough)));
+    };
   };
   // Motor trims from the highest down: the higher, the farther aft the lower unit.
   const shares = trims.length > 0 ? Array.from({ length: trimSteps + 1 }, (_, i) => 1 - i / trimSteps) : [0];

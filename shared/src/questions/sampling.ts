@@ -1,6 +1,7 @@
 // The same questions put to the engine many times, every uncertain input drawn anew.
 import type { Side } from '../engine/beams/fan.ts';
 import { fanOf } from '../engine/beams/fan.ts';
+import { seenAll } from '../engine/beams/seen-solid.ts';
 import { slabShare } from '../engine/beams/slab.ts';
 import { clearFrom, shadedFrom } from '../engine/thresholds.ts';
 import type { TrimPoint } from '../engine/trim/running-trim.ts';
@@ -64,8 +65,8 @@ export function sampleClearance(p: Prepared, n: FitNumbers, tiltDeg: number, sid
     const { solids, poseAt } = sceneOf(p, drawn);
     const element = input.sideElement(p.parts.transducer, drawn.transducer);
     const fan = fanOf(element);
-    const sensor = poseAt(degToRad(tiltDeg + setTiltSigmaDeg * (tiltScores[draw] as number)));
-    for (const side of sides) samples[side].values[draw] = slabShare(solids, sensor, element, fan, side);
+    const seen = seenAll(poseAt(degToRad(tiltDeg + setTiltSigmaDeg * (tiltScores[draw] as number))), solids);
+    for (const side of sides) samples[side].values[draw] = slabShare(seen, element, fan, side);
   }
   return samples;
 }

@@ -1,6 +1,6 @@
 // Which directions of a fan can meet a solid at all: seen along the sensor's x axis, a ray of any along-track angle is a half-line
 // at its depression, so a convex solid can only be met at the depressions its projection covers.
-import { inverse, rotate } from '../rotation.ts';
+import { rotate } from '../rotation.ts';
 import type { SideElement } from '../sensor.ts';
 import type { Prism } from '../solids/prism.ts';
 import type { Shape } from '../solids/solid.ts';
@@ -23,10 +23,13 @@ export function depressionSpan(seen: SeenSolid, side: Side, fan: Fan, element: S
   const whole = { first: 0, last: steps - 1 };
   const sign = side === 'starboard' ? 1 : -1;
   if (shape.kind === 'prism') return staysOutside(shape.planes, seen, sign, fan, element, reachM) ? null : whole;
-  const { turn, face } = seen;
+  const { back } = seen;
   const half = halfSizes(shape);
-  const back = inverse(turn);
-  const [mx, my, mz] = rotate(back, [-face[0], -face[1], -face[2]]);
+  const [mx, my, mz] = seen.middle;
+  // A ball about it first: wholly inboard, above, ahead or aft.
+  const ball = Math.sqrt(half[0] * half[0] + half[1] * half[1] + half[2] * half[2]);
+  const widestOfAll = element.apertureM / 2 + reachM * Math.sin(element.alongTrackWidthRad / 2) + marginRad;
+  if (sign * my + ball < 0 || mz + ball < 0 || mx + ball < -widestOfAll || mx - ball > widestOfAll) return null;
   let aftmost = Number.POSITIVE_INFINITY;
   let foremost = Number.NEGATIVE_INFINITY;
   let farSquared = 0;
@@ -67,14 +70,13 @@ export function depressionSpan(seen: SeenSolid, side: Side, fan: Fan, element: S
 /** Whether some plane of a prism keeps every ray of the slab outside. */
 function staysOutside(
   planes: Float64Array,
-  { turn, face }: SeenSolid,
+  { back, face }: SeenSolid,
   sign: number,
   fan: Fan,
   element: SideElement,
   reachM: number,
 ): boolean {
   const sinAlong = Math.sin(element.alongTrackWidthRad / 2);
-  const back = inverse(turn);
   const from = fan.depressionsRad[0] as number;
   const to = fan.depressionsRad[fan.depressionsRad.length - 1] as number;
   for (let i = 0; i < planes.length; i += 4) {

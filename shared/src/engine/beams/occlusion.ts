@@ -7,6 +7,7 @@ import { degToRad } from '../units.ts';
 import { type Fan, fanOf, type Side } from './fan.ts';
 import { diffractionMarginM, nearestPass } from './least-clearance.ts';
 import { clearShare, type Sector, sectorsOf } from './sectors.ts';
+import { seenAll } from './seen-solid.ts';
 import { castSlab, slabShare } from './slab.ts';
 
 export interface SideClearance {
@@ -64,10 +65,10 @@ export function tiltWindow(
   const fan = fanOf(element);
   const known = new Map<number, boolean>();
   const isClear = (step: number): boolean => {
-    const seen = known.get(step);
-    if (seen !== undefined) return seen;
-    const sensor = poseAt(step * windowStepRad);
-    const clear = sides.every((side) => slabShare(solids, sensor, element, fan, side, clearFrom) >= clearFrom);
+    const before = known.get(step);
+    if (before !== undefined) return before;
+    const seen = seenAll(poseAt(step * windowStepRad), solids);
+    const clear = sides.every((side) => slabShare(seen, element, fan, side, clearFrom) >= clearFrom);
     known.set(step, clear);
     return clear;
   };

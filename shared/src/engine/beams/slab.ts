@@ -6,7 +6,7 @@ import type { Solid } from '../solids/solid.ts';
 import { reachM } from '../thresholds.ts';
 import { depressionSpan } from './depression-span.ts';
 import type { Fan, Side } from './fan.ts';
-import { seenBy } from './seen-solid.ts';
+import { type SeenSolid, seenBy } from './seen-solid.ts';
 import { allCells, apertureCells, bitCount, markRuns, raysADirection, ways } from './slab-runs.ts';
 
 /** What is blocked, direction by direction, in the order of the fan's depressions. */
@@ -64,18 +64,17 @@ function cellsFor({ opacity }: Solid, { opaque, veils }: Taken, steps: number): 
  * Clear share of a side, Σ w (1 − blocked) / Σ w, 0 to 1. Below `least` it may stop early and answer with any value below it:
  * as soon as one solid alone takes too much.
  */
-export function slabShare(solids: readonly Solid[], sensor: Pose, element: SideElement, fan: Fan, side: Side, least = 0): number {
+export function slabShare(solids: readonly SeenSolid[], element: SideElement, fan: Fan, side: Side, least = 0): number {
   const steps = fan.depressionsRad.length;
   const budget = least > 0 ? (1 - least + 1e-12) * fan.totalWeight : Number.POSITIVE_INFINITY;
   let taken: Taken | null = null;
   let from = steps;
   let to = -1;
-  for (const solid of solids) {
-    const seen = seenBy(sensor, solid);
+  for (const seen of solids) {
     const span = depressionSpan(seen, side, fan, element, reachM);
     if (!span) continue;
     taken ??= { opaque: new Int32Array(steps * ways), veils: [] };
-    const lost = markRuns(seen, span, element, fan, side, cellsFor(solid, taken, steps), reachM, null, budget);
+    const lost = markRuns(seen, span, element, fan, side, cellsFor(seen.solid, taken, steps), reachM, null, budget);
     if (lost > budget) return Math.min(least / 2, 1 - lost / fan.totalWeight);
     if (lost === 0) continue;
     from = Math.min(from, span.first);
