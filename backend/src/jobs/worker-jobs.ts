@@ -26,6 +26,9 @@ interface Waiting {
 /** An idle worker gives its memory back after a minute. */
 const idleMs = 60_000;
 
+/** Rows live for one batch: with room for several, few are carried from one generation to the next. */
+const youngMb = 96;
+
 /** @param entry file of the worker's bundle */
 export function workerJobs(entry: string, folders: WorkerFolders): ImportJobs {
   let worker: Worker | undefined;
@@ -52,7 +55,7 @@ export function workerJobs(entry: string, folders: WorkerFolders): ImportJobs {
   };
 
   const start = (): Worker => {
-    const made = new Worker(entry, { workerData: folders });
+    const made = new Worker(entry, { workerData: folders, resourceLimits: { maxYoungGenerationSizeMb: youngMb } });
     made.on('message', ({ seq, result, problem, failure }: WorkerAnswer) => {
       const found = take(seq);
       if (!found) return;

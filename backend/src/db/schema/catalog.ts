@@ -9,9 +9,9 @@ import { trimPointFields } from '@tiltwright/shared/schemas/trim-point.ts';
 import { sql } from 'drizzle-orm';
 import { check, index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
 import { checksOf, columnsOf } from './catalog-columns.ts';
+import { type Provenance, provenanceColumn } from './provenance.ts';
 
-/** Where each filled field of a record comes from; sigma in the field's own unit. */
-export type Provenance = Record<string, { basis: Basis; sigma: number | null; source: string | null; sourceDate: string | null }>;
+export type { Provenance } from './provenance.ts';
 export type RecordStatus = 'published' | 'superseded' | 'withdrawn';
 
 export const makers = sqliteTable('makers', {
@@ -30,7 +30,7 @@ const envelope = () => ({
   edition: integer('edition')
     .notNull()
     .references(() => editions.edition),
-  provenance: text('provenance', { mode: 'json' }).$type<Provenance>().notNull(),
+  provenance: provenanceColumn('provenance').notNull(),
 });
 
 const envelopeRules = (name: string) => [

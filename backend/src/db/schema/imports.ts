@@ -3,7 +3,7 @@ import type { CellProblem, Fate, FateCounts, FieldChange, ImportStatus } from '@
 import type { Fix, Mapping } from '@tiltwright/shared/schemas/mapping.ts';
 import { sql } from 'drizzle-orm';
 import { check, index, integer, primaryKey, sqliteTable, text } from 'drizzle-orm/sqlite-core';
-import type { Provenance } from './catalog.ts';
+import type { Origin } from './provenance.ts';
 
 export const imports = sqliteTable(
   'imports',
@@ -49,7 +49,7 @@ export const imports = sqliteTable(
   ],
 );
 
-export type Origin = Provenance[string];
+export type { Origin };
 
 /** What a row would write: field values, where they come from, and the few fields that come from elsewhere or are known closer. */
 export interface RowWrite {

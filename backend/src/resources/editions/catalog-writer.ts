@@ -3,7 +3,7 @@ import { columnOfField } from '@tiltwright/shared/csv/columns.ts';
 import { matchKey, normaliseName } from '@tiltwright/shared/names.ts';
 import type { CatalogTable } from '@tiltwright/shared/schemas/catalog-record.ts';
 import type Database from 'better-sqlite3';
-import type { Provenance } from '../../db/schema/catalog.ts';
+import { type Provenance, packProvenance } from '../../db/schema/provenance.ts';
 import { newId } from '../../ids.ts';
 import { kinds } from '../catalog/kinds.ts';
 import { indexWords } from '../search/index-words.ts';
@@ -47,7 +47,7 @@ export function catalogWriter(sqlite: Database.Database, kind: CatalogTable, edi
         write.supersededBy ?? null,
         revision,
         edition,
-        JSON.stringify(provenance),
+        packProvenance(provenance),
         ...cells,
       );
     }
@@ -89,7 +89,7 @@ export function catalogWriter(sqlite: Database.Database, kind: CatalogTable, edi
       statement = sqlite.prepare(`UPDATE ${table.name} SET ${columns.map((column) => `${column} = ?`).join(', ')} WHERE id = ?`);
       updates.set(form, statement);
     }
-    const cells: unknown[] = [revision, edition, JSON.stringify(provenance), generic(provenance)];
+    const cells: unknown[] = [revision, edition, packProvenance(provenance), generic(provenance)];
     for (const field of touched) cells.push(toCell(write.values[field]));
     if (renamed) cells.push(keyOf(values));
     if (moved) cells.push(status, write.supersededBy ?? null);

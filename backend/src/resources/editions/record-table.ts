@@ -3,7 +3,8 @@ import { columnOfField } from '@tiltwright/shared/csv/columns.ts';
 import type { CatalogTable } from '@tiltwright/shared/schemas/catalog-record.ts';
 import { getTableName } from 'drizzle-orm';
 import * as z from 'zod';
-import type { Provenance, RecordStatus } from '../../db/schema/catalog.ts';
+import type { RecordStatus } from '../../db/schema/catalog.ts';
+import { type Provenance, unpackProvenance } from '../../db/schema/provenance.ts';
 import { kinds } from '../catalog/kinds.ts';
 
 /** A stored record as plain fields; blank fields are left out. Its provenance is shared between records: never change it. */
@@ -71,7 +72,7 @@ const remembered = new Map<string, Provenance>();
 function parseProvenance(text: string): Provenance {
   let found = remembered.get(text);
   if (found === undefined) {
-    found = JSON.parse(text) as Provenance;
+    found = unpackProvenance(text);
     if (remembered.size >= mostRemembered) remembered.clear();
     remembered.set(text, found);
   }

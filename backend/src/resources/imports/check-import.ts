@@ -1,18 +1,17 @@
 // The check: every row of the kept file gets its fate, in batches that each stand by themselves, so that a stop loses none of them.
 import { readFile } from 'node:fs/promises';
 import path from 'node:path';
-import { setImmediate as breathe } from 'node:timers/promises';
-import type { RowReading } from '@tiltwright/shared/csv/read-row.ts';
 import { type FateCounts, fates } from '@tiltwright/shared/schemas/import.ts';
 import type { Config } from '../../config.ts';
 import type { Db } from '../../db/connect.ts';
 import { ApiProblem } from '../../errors.ts';
 import { currentEdition } from '../catalog/queries.ts';
 import { rowStore } from './import-rows.ts';
+import type { Judgement } from './judge-row.ts';
 import { missingColumns } from './map-columns.ts';
 import { type ImportRecord, importOrProblem, setImport } from './queries.ts';
 import { mappedReader } from './read-mapped.ts';
-import { readTable } from './read-table.ts';
+import { eachRow, readHead } from './read-table.ts';
 import { rowJudge } from './row-judge.ts';
 
 /** Rows to one durable step: some 20 ms of judging, a few of writing. */
@@ -77,42 +76,65 @@ async function judgeRows({ db, config }: CheckDeps, id: string): Promise<void> {
   const record = importOrProblem(db, id);
   if (record.status !== 'checking') return;
   const bytes = await readFile(path.join(config.uploadsFolder, record.storedAs));
-  const table = readTable(bytes, { table: record.table, headerRow: record.headerRow, ...choicesOf(record) });
-  const reader = mappedReader(record.table, table.header, record.mapping, { decimalComma: table.decimalComma, fixes: record.fixes });
-  const rows = rowStore(db, id);
-  const edits = rows.edits();
-  const read = (at: number) => reader.read(table.rows[at]!.cells, edits.get(table.rows[at]!.n)?.cells);
-  const judge = rowJudge(db, record.table, (n) => readRowNumber(table.rows, n, read));
-
-  let done = resumable(db, record) ? record.checkedRows : 0;
-  if (done === 0) rows.clear();
-  const counts = done === 0 ? noCounts() : rows.counts();
-  for (const { n, rowKey } of done === 0 ? [] : rows.keys()) judge.noteDone(n, rowKey, readRowNumber(table.rows, n, read));
-
-  while (done < table.rows.length) {
-    const batch = table.rows.slice(done, done + rowsAtOnce).map(({ n, cells }, index) => {
-      const judged = judge.judge(n, read(done + index), edits.get(n)?.resolution ?? null);
-      counts[judged.fate]++;
-      return { n, cells, judged };
-    });
-    const stillWanted = db.transaction(
-      () => {
-        const now = importOrProblem(db, id);
-        // A check begun anew has set the count back.
-        if (now.status !== 'checking' || now.checkedRows !== done) return false;
-        for (const row of batch) rows.put(row.n, row.cells, row.judged);
-        setImport(db, id, { checkedRows: done + batch.length });
-        return true;
-      },
-      { behavior: 'immediate' },
-    );
-    if (!stillWanted) return;
-    done += batch.length;
-    await breathe();
-  }
-  finishCheck(db, id, {
-    ...{ counts, rows: table.rows.length, header: table.header, decimalComma: table.decimalComma ?? null },
+  // The whole file was looked at when it came: now its head is enough to know where the rows begin.
+  const table = readHead(bytes, { table: record.table, headerRow: record.headerRow, ...choicesOf(record) }, 1);
+  const reader = mappedReader(record.table, table.header, record.mapping, {
+    fixes: record.fixes,
+    ...(record.decimalComma !== null && { decimalComma: record.decimalComma }),
   });
+  const store = rowStore(db, id);
+  const edits = store.edits();
+  const read = (n: number, cells: readonly string[]) => reader.read(cells, edits.get(n)?.cells);
+
+  const done = resumable(db, record) ? record.checkedRows : 0;
+  if (done === 0) store.clear();
+  const counts = done === 0 ? noCounts() : store.counts();
+  const known = new Map((done === 0 ? [] : store.keys()).map(({ n, rowKey }) => [n, rowKey]));
+  let batch: JudgedRow[] = [];
+  const judge = rowJudge(db, record.table, (n) => read(n, batch.find((row) => row.n === n)?.cells ?? store.cells(n)));
+  let [passed, kept] = [0, done];
+
+  const keep = (): boolean => {
+    const stillWanted = keepBatch(db, id, store, batch, kept);
+    kept += batch.length;
+    batch = [];
+    return stillWanted;
+  };
+  let wanted = true;
+  eachRow(bytes, table, (n, cells) => {
+    if (passed++ < done) {
+      const rowKey = known.get(n);
+      if (rowKey !== undefined) judge.noteDone(n, rowKey, read(n, cells));
+      return true;
+    }
+    const judged = judge.judge(n, read(n, cells), edits.get(n)?.resolution ?? null);
+    counts[judged.fate]++;
+    batch.push({ n, cells, judged });
+    if (batch.length >= rowsAtOnce) wanted = keep();
+    return wanted;
+  });
+  if (wanted && batch.length > 0) wanted = keep();
+  if (wanted) finishCheck(db, id, { counts, rows: kept, header: table.header });
+}
+
+interface JudgedRow {
+  n: number;
+  cells: string[];
+  judged: Judgement;
+}
+
+/** One durable step. @returns false where the check was cancelled, or begun anew, which has set the count back */
+function keepBatch(db: Db, id: string, store: ReturnType<typeof rowStore>, batch: readonly JudgedRow[], kept: number): boolean {
+  return db.transaction(
+    () => {
+      const now = importOrProblem(db, id);
+      if (now.status !== 'checking' || now.checkedRows !== kept) return false;
+      for (const { n, cells, judged } of batch) store.put(n, cells, judged);
+      setImport(db, id, { checkedRows: kept + batch.length });
+      return true;
+    },
+    { behavior: 'immediate' },
+  );
 }
 
 /** Rows judged against an older edition are judged again. */
@@ -137,14 +159,3 @@ export const choicesOf = ({ encoding, delimiter }: ImportRecord) => ({
 });
 
 const noCounts = () => Object.fromEntries(fates.map((fate) => [fate, 0])) as FateCounts;
-
-function readRowNumber(rows: readonly { n: number }[], n: number, read: (at: number) => RowReading): RowReading {
-  // Rows stand in the order of their numbers.
-  let [low, high] = [0, rows.length - 1];
-  while (low < high) {
-    const middle = (low + high) >> 1;
-    if (rows[middle]!.n < n) low = middle + 1;
-    else high = middle;
-  }
-  return read(low);
-}

@@ -30,12 +30,17 @@ export function rowStore({ $client: sqlite }: Pick<Db, '$client'>, id: string) {
   const insert = sqlite.prepare(
     'INSERT OR REPLACE INTO import_rows (import_id, n, fate, name, record_id, row_key, cells, write, errors, cautions, changes) VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)',
   );
+  const cellsOf = sqlite.prepare('SELECT cells FROM import_rows WHERE import_id = ? AND n = ?').pluck();
   return {
     put(n: number, cells: readonly string[], { fate, name, recordId, rowKey, write, errors, cautions, changes }: Judgement): void {
       insert.run(
         ...[id, n, fate, name, recordId, rowKey, JSON.stringify(cells), write === null ? null : JSON.stringify(write)],
         ...[json(errors), json(cautions), json(changes)],
       );
+    },
+    /** The file's cells of a row that was kept before. */
+    cells(n: number): string[] {
+      return JSON.parse(cellsOf.get(id, n) as string) as string[];
     },
     clear(): void {
       const step = sqlite.prepare(

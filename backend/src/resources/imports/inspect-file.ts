@@ -4,7 +4,7 @@ import path from 'node:path';
 import { matchHeader } from '@tiltwright/shared/csv/headers.ts';
 import type { Config } from '../../config.ts';
 import type { ImportOrder, Inspection } from '../../jobs/import-jobs.ts';
-import { readTable } from './read-table.ts';
+import { surveyTable } from './read-table.ts';
 
 /**
  * Reads a whole uploaded file once, to say what it is.
@@ -15,7 +15,7 @@ export async function inspectFile(
   { storedAs, table, choices }: Extract<ImportOrder, { kind: 'inspect' }>,
 ): Promise<Inspection> {
   const bytes = await readFile(path.join(uploadsFolder, storedAs));
-  const { header, headerRow, rows, encoding, delimiter, decimalComma } = readTable(bytes, { table, ...choices });
+  const { header, headerRow, rows, encoding, delimiter, decimalComma } = surveyTable(bytes, { table, ...choices });
   const { unknown, columns, yearsAt } = matchHeader(table, header);
   const known = columns.filter((column) => column !== undefined).length + (yearsAt === undefined ? 0 : 1);
   return {
