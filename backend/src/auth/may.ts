@@ -24,7 +24,6 @@ const rules = {
   'imports.manage': { who: ['steward'], scope: null },
 } as const satisfies Record<string, Rule>;
 export type Permission = keyof typeof rules;
-export const permissions = Object.keys(rules) as Permission[];
 
 /** An admin may all that a steward may; customer and integrator stand on their own. */
 const effectiveRoles = (roles: readonly Role[]) => (roles.includes('admin') ? [...roles, 'steward' as const] : roles);

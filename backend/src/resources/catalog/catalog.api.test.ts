@@ -46,8 +46,10 @@ test('the pages of a list hold every record once', async () => {
   const ids: string[] = [];
   let next: string | null = '';
   while (next !== null) {
-    const { body } = await agent.get(`/api/v1/hulls?limit=7${next ? `&cursor=${next}` : ''}`).expect(200);
-    ids.push(...body.data.map((hull: { id: string }) => hull.id));
+    const { body }: { body: { data: { id: string }[]; next: string | null } } = await agent
+      .get(`/api/v1/hulls?limit=7${next ? `&cursor=${next}` : ''}`)
+      .expect(200);
+    ids.push(...body.data.map((hull) => hull.id));
     next = body.next;
   }
   expect(new Set(ids).size).toBe(ids.length);

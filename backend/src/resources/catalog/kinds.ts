@@ -1,5 +1,5 @@
 // The four kinds of catalog records differ in their fields, not in what is done with them.
-import { type CatalogTable, catalogTables, envelopeFields } from '@tiltwright/shared/schemas/catalog-record.ts';
+import { type CatalogTable, envelopeFields } from '@tiltwright/shared/schemas/catalog-record.ts';
 import { Hull, HullSheet, hullFields } from '@tiltwright/shared/schemas/hull.ts';
 import { LowerUnit, LowerUnitSheet, lowerUnitFields } from '@tiltwright/shared/schemas/lower-unit.ts';
 import { Mount, MountSheet, mountFields } from '@tiltwright/shared/schemas/mount.ts';
@@ -36,8 +36,6 @@ export type CatalogRow =
   | typeof transducers.$inferSelect
   | typeof mounts.$inferSelect;
 export type CatalogRecord = Record<string, unknown> & { id: string; maker: string; model: string };
-
-export const kindOfId = (id: string): CatalogTable | undefined => catalogTables.find((kind) => id.startsWith(`${kinds[kind].prefix}_`));
 
 const envelopeNames = Object.keys(envelopeFields) as (keyof typeof envelopeFields)[];
 
