@@ -11,7 +11,7 @@ test.each([
   ['Withyholm Reedcutter 14 2019', 'Reedcutter 14'],
   ['2016 withyholm reedcutter 14', 'Reedcutter 14'],
   ['2019 reedcuter14', 'Reedcutter 14'],
-  ['Reed Cutter 14 2019 w/ trailer, white', 'Reedcutter 14'],
+  ['Reed Cutter 14 2019 w/ trailer, cover', 'Reedcutter 14'],
   ['OSTREL HEDDLE-14', 'Heddle 14'],
   ['ostrl heddle 12', 'Heddle 12'],
   ['Quilhaven coperplate 670', 'Copperplate 670'],

@@ -16,7 +16,7 @@ export interface Finding {
 export interface CatalogSearch {
   /** Best first, at most `limit`. */
   find(question: string, kind: CatalogTable | undefined, limit: number): Finding[];
-  /** Whether any record has a word that this begins, or that it may be a slip of. */
+  /** Whether any record has this very word. */
   knows(word: string): boolean;
 }
 
@@ -53,8 +53,7 @@ export function catalogSearch(db: Db): CatalogSearch {
 
   return {
     knows(word) {
-      const words = present();
-      return words.begins(word) || words.readings(word).length > 0;
+      return present().has(word);
     },
     find(question, kind, limit) {
       const known = present();

@@ -12,6 +12,7 @@ export interface Reading {
 export interface Vocabulary {
   /** Catalog words within two slips of a whole word, or whose beginning is within one slip of it; best first. */
   readings(word: string): Reading[];
+  has(word: string): boolean;
   /** Whether any word of the catalog begins with it. */
   begins(word: string): boolean;
 }
@@ -39,7 +40,9 @@ export function loadVocabulary(db: Db): Vocabulary {
     }
   }
   const sorted = rows.map(({ term }) => term).sort();
+  const every = new Set(sorted);
   return {
+    has: (word) => every.has(word),
     begins(word) {
       let low = 0;
       let high = sorted.length;
