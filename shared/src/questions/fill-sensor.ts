@@ -49,9 +49,11 @@ export function fillStandoff(asked: number | undefined, mount: MountPart | undef
 /** Range of the bracket's scale and where its zero stands, degrees. */
 export function fillTiltScale(mount: MountPart, assumptions: Assumption[]) {
   const read = partReader(mount, 'mount', assumptions);
+  const one = read('tiltMinDeg', usual(usualTiltRange.tiltMinDeg, 3), 'Usual range of brackets.').value;
+  const other = read('tiltMaxDeg', usual(usualTiltRange.tiltMaxDeg, 3), 'Usual range of brackets.').value;
   return {
-    minDeg: read('tiltMinDeg', usual(usualTiltRange.tiltMinDeg, 3), 'Usual range of brackets.').value,
-    maxDeg: read('tiltMaxDeg', usual(usualTiltRange.tiltMaxDeg, 3), 'Usual range of brackets.').value,
+    minDeg: Math.min(one, other),
+    maxDeg: Math.max(one, other),
     zeroDeg: read('tiltZeroDeg', usual(0, 0), 'The scale is taken to read 0 square to the transom face.').value,
   };
 }

@@ -4,9 +4,10 @@ import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils';
 import type { Side } from '../engine/beams/fan.ts';
 import type { SideClearance, TiltWindow } from '../engine/beams/occlusion.ts';
 import type { Estimate } from '../engine/estimate.ts';
+import { wedgeRise } from '../engine/level.ts';
 import type { TrimFlag } from '../engine/trim/estimated-trim.ts';
 import type { TrimBasis } from '../engine/trim/running-trim.ts';
-import { mToMm, radToDeg } from '../engine/units.ts';
+import { degToRad, mToMm, radToDeg } from '../engine/units.ts';
 import type { ClearanceAnswer, SideAnswer, TiltAnswer, TrimAnswer } from '../schemas/answer.ts';
 import type { WantedSides } from '../schemas/fit.ts';
 import type { BothSides } from './evaluate.ts';
@@ -34,6 +35,9 @@ export interface TiltScale {
   maxDeg: number;
 }
 
+/** A gap this wide is closed by no wedge, degrees. */
+const steepestWedgeDeg = 80;
+
 /** Tilt, attitude and bracket setting. `setDeg` null takes the needed tilt; `scale` null where no bracket stands on a transom. */
 export function tiltAnswer(
   trimDeg: number,
@@ -53,7 +57,7 @@ export function tiltAnswer(
     bracketSettingDeg: setting,
     inBracketRange: wedgeDeg === 0,
     wedgeDeg,
-    shimMmPer100: 100 * Math.tan((Math.abs(wedgeDeg) * Math.PI) / 180),
+    shimMmPer100: Math.abs(wedgeDeg) < steepestWedgeDeg ? 100 * wedgeRise(degToRad(wedgeDeg)) : null,
   };
 }
 
