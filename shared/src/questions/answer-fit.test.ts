@@ -179,3 +179,15 @@ describe('a sampled fit', () => {
     expect(answer.dominantInput?.name).toMatch(/^lowerUnits\.0\./);
   });
 });
+
+describe('advice to re-tilt', () => {
+  const free = { motors: [{ part: motor, motorTrimDeg: 70 }], running: { measuredTrimDeg: 3, measuredSigmaDeg: 0.4 } };
+
+  it('is given where the gain exceeds the tilt’s own interval', () => {
+    expect(ask({ ...free, placement: { tiltDeg: 0 } }).action.code).toBe('re-tilt');
+  });
+
+  it('is kept back where the change drowns in the uncertainty', () => {
+    expect(ask({ ...free, placement: { tiltDeg: -2.6 } }).action.code).toBe('leave');
+  });
+});

@@ -13,6 +13,7 @@ import { geometryFaults } from './geometry-faults.ts';
 import { hingesOf } from './next-measurement.ts';
 import type { AnswerContext, ResolvedParts } from './parts.ts';
 import { type FitNumbers, middleNumbers, type Prepared, prepare } from './prepare.ts';
+import { reTiltGains } from './re-tilt.ts';
 import { type Reach, reachOf } from './reach.ts';
 import { clearanceAnswer, digestOf, rounded, sidesOf, type TiltScale, tiltAnswer, trimAnswer } from './reply.ts';
 import { oddsOf, sampleClearance, sampleTrim } from './sampling.ts';
@@ -50,8 +51,8 @@ export function answerFit(question: FitQuestion, parts: ResolvedParts, context: 
     sides,
     odds,
     wanted,
-    trim,
     tilt,
+    reTiltGains: reTiltGains(p, n, scene, sides, wanted, trim, tilt),
     reach: { ...reach, unblocked: reach.unblocked || (sampled && maybeUnblocked(p, reach, wanted)) },
     rules: {
       no: compatibility.some(({ outcome }) => outcome === 'no'),

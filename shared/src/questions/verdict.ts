@@ -2,9 +2,8 @@
 
 import type { Side } from '../engine/beams/fan.ts';
 import { actionTexts, coded, type ReasonCode, reasonCodes } from '../engine/codes.ts';
-import { sigmasIn90 } from '../engine/estimate.ts';
 import { clearFrom, shadedFrom, sureFrom } from '../engine/thresholds.ts';
-import type { TiltAnswer, TrimAnswer } from '../schemas/answer.ts';
+import type { TiltAnswer } from '../schemas/answer.ts';
 import type { Action, Verdict } from '../schemas/fit.ts';
 import type { BothSides } from './evaluate.ts';
 import type { SideOdds } from './sampling.ts';
@@ -16,8 +15,9 @@ export interface Findings {
   /** What the draws say of each side; null without sampling, when the middle values speak for themselves. */
   odds: Record<Side, SideOdds> | null;
   wanted: readonly Side[];
-  trim: TrimAnswer;
   tilt: TiltAnswer;
+  /** Whether setting the needed tilt would gain anything an owner could see. */
+  reTiltGains: boolean;
   /** Whether the wanted sides clear, or at least are no longer blocked, at some setting within reach. */
   reach: { unblocked: boolean; clearByMotorTrim: boolean; clearByTilt: boolean };
   /** Whether some rule of compatibility says no, or calls for care. */
@@ -72,7 +72,5 @@ function actionOf(f: Findings, verdict: Verdict, codes: readonly ReasonCode[]): 
   if (codes.includes('side-blocked')) return freed;
   if (codes.includes('tilt-out-of-range')) return 'add-wedge';
   if (codes.includes('side-shaded')) return freed;
-  // Advice to re-tilt must gain more than the tilt itself is uncertain by.
-  const off = Math.abs(f.tilt.setDeg - f.tilt.neededDeg);
-  return off > sigmasIn90 * f.trim.sigmaDeg ? 're-tilt' : 'leave';
+  return f.reTiltGains ? 're-tilt' : 'leave';
 }
