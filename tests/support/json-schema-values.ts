@@ -48,11 +48,11 @@ export const hostile: fc.Arbitrary<unknown> = fc.oneof(
 );
 
 const rarely = <T>(usual: fc.Arbitrary<T>): fc.Arbitrary<unknown> =>
-  fc.oneof({ arbitrary: usual, weight: 24 }, { arbitrary: hostile, weight: 1 });
+  fc.oneof({ arbitrary: usual, weight: 50 }, { arbitrary: hostile, weight: 1 });
 
-export function valueOf(schema: Schema | undefined, components: Components, depth = 0): fc.Arbitrary<unknown> {
+export function schemaValue(schema: Schema | undefined, components: Components, depth = 0): fc.Arbitrary<unknown> {
   if (!schema || depth > 12) return fc.constant(null);
-  const inner = (next: Schema | undefined) => valueOf(next, components, depth + 1);
+  const inner = (next: Schema | undefined) => schemaValue(next, components, depth + 1);
   if (schema.$ref) return inner(components[schema.$ref.split('/').at(-1)!]);
   const choices = schema.anyOf ?? schema.oneOf;
   if (choices) return fc.oneof(...choices.map(inner));

@@ -7,7 +7,7 @@ import { degToRad } from '../units.ts';
 import { type Fan, fanOf, type Side } from './fan.ts';
 import { diffractionMarginM, nearestPass } from './least-clearance.ts';
 import { clearShare, type Sector, sectorsOf } from './sectors.ts';
-import { seenAll } from './seen-solid.ts';
+import { type SeenSolid, seenAll, seenBy } from './seen-solid.ts';
 import { castSlab, slabShare } from './slab.ts';
 
 export interface SideClearance {
@@ -64,11 +64,19 @@ export function tiltWindow(
 ): TiltWindow {
   const fan = fanOf(element);
   const known = new Map<number, boolean>();
+  // What hid the beam at one tilt most likely hides it at the next: it is asked first, alone.
+  let suspect: Suspect | null = null;
   const isClear = (step: number): boolean => {
     const before = known.get(step);
     if (before !== undefined) return before;
-    const seen = seenAll(poseAt(step * windowStepRad), solids);
-    const clear = sides.every((side) => slabShare(seen, element, fan, side, clearFrom) >= clearFrom);
+    const sensor = poseAt(step * windowStepRad);
+    const share = (seen: readonly SeenSolid[], side: Side) => slabShare(seen, element, fan, side, clearFrom);
+    let clear = suspect === null || share([seenBy(sensor, suspect.solid)], suspect.side) >= clearFrom;
+    if (clear) {
+      const seen = seenAll(sensor, solids);
+      clear = sides.every((side) => share(seen, side) >= clearFrom);
+      if (!clear) suspect = suspectAmong(seen, sides, (one, side) => share([one], side) < clearFrom);
+    }
     known.set(step, clear);
     return clear;
   };
@@ -83,4 +91,18 @@ export function tiltWindow(
   const steps = Array.from({ length: 2 * windowSteps + 1 }, (_, i) => i - windowSteps).sort((a, b) => Math.abs(a - at) - Math.abs(b - at));
   const nearest = steps.find(isClear);
   return { windowRad: null, nearestClearRad: nearest === undefined ? null : nearest * windowStepRad };
+}
+
+interface Suspect {
+  solid: Solid;
+  side: Side;
+}
+
+/** A solid that hides a side by itself; null where only several together do. */
+function suspectAmong(seen: readonly SeenSolid[], sides: readonly Side[], hides: (one: SeenSolid, side: Side) => boolean): Suspect | null {
+  for (const side of sides) {
+    const one = seen.find((candidate) => hides(candidate, side));
+    if (one) return { solid: one.solid, side };
+  }
+  return null;
 }
