@@ -35,6 +35,15 @@ async function storyFit(page: Page, index: number) {
     .click();
 }
 
+async function asked(page: Page) {
+  await page.goto(`${address}/sign-up`);
+  await page.getByLabel('Name').fill('A newcomer');
+  await page.getByLabel('E-mail address').fill('newcomer@tiltwright.example');
+  await page.getByLabel('Password').fill('twelve or more');
+  await page.getByRole('button', { name: 'Make an account' }).click();
+  await page.getByRole('link', { name: 'Read the mail' }).waitFor();
+}
+
 async function uploaded(page: Page) {
   const table = 'maker,model,form,length_m,deadrise_deg\nAlderwick,Moorhen 46,modified-v,4.6,17\nAlderwick,Moorhen 60,modified-v,6,steep\n';
   const created = await page.request.post(`${address}/api/v1/imports`, {
@@ -74,6 +83,22 @@ const screens: Screen[] = [
   { name: 'fit-twins', as: 'customer', open: (page) => storyFit(page, 1) },
   { name: 'sign-in', open: go('/sign-in') },
   { name: 'sign-up', open: go('/sign-up') },
+  { name: 'sign-up-asked', open: asked },
+  { name: 'outbox', open: async (page) => (await asked(page), page.getByRole('link', { name: 'Read the mail' }).click()) },
+  { name: 'reset', open: go('/reset') },
+  { name: 'link-not-whole', open: go('/verify') },
+  { name: 'account', as: 'customer', open: go('/account') },
+  { name: 'admin-people', as: 'admin', open: go('/admin') },
+  {
+    name: 'admin-person',
+    as: 'admin',
+    open: async (page) => page.goto(`${address}/admin/people/${await idOf(page, 'users?q=customer')}`),
+  },
+  { name: 'admin-invitations', as: 'admin', open: go('/admin/invitations') },
+  { name: 'admin-limits', as: 'admin', open: go('/admin/limits') },
+  { name: 'admin-audit', as: 'admin', open: go('/admin/audit') },
+  { name: 'admin-mail', as: 'admin', open: go('/admin/mail') },
+  { name: 'admin-health', as: 'admin', open: go('/admin/health') },
   { name: 'steward-visitor', open: go('/steward') },
   { name: 'steward-customer', as: 'customer', open: go('/steward') },
   { name: 'steward', as: 'steward', open: go('/steward') },

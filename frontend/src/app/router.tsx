@@ -14,6 +14,16 @@ const SignUp = lazy(() => import('./routes/sign-up.tsx'));
 const Verify = lazy(() => import('./routes/verify.tsx'));
 const Reset = lazy(() => import('./routes/reset.tsx'));
 const Outbox = lazy(() => import('./routes/outbox.tsx'));
+const Invitation = lazy(() => import('./routes/invitation.tsx'));
+const Account = lazy(() => import('./routes/account.tsx'));
+const Admin = lazy(() => import('./routes/admin.tsx'));
+const AdminPerson = lazy(() => import('./routes/admin-person.tsx'));
+const AdminInvitations = lazy(() => import('./routes/admin-invitations.tsx'));
+const AdminLimits = lazy(() => import('./routes/admin-limits.tsx'));
+const AdminAudit = lazy(() => import('./routes/admin-audit.tsx'));
+const AdminMail = lazy(() => import('./routes/admin-mail.tsx'));
+const AdminMailSheet = lazy(() => import('./routes/admin-mail-sheet.tsx'));
+const AdminHealth = lazy(() => import('./routes/admin-health.tsx'));
 const Steward = lazy(() => import('./routes/steward.tsx'));
 const StewardImport = lazy(() => import('./routes/steward-import.tsx'));
 const NotFound = lazy(() => import('./routes/not-found.tsx'));
@@ -34,6 +44,16 @@ export function Router() {
           <Route path="verify" element={<Verify />} />
           <Route path="reset" element={<Reset />} />
           <Route path="outbox" element={<Outbox />} />
+          <Route path="invitation" element={<Invitation />} />
+          <Route path="account" element={<Account />} />
+          <Route path="admin" element={<Admin />} />
+          <Route path="admin/people/:id" element={<AdminPerson />} />
+          <Route path="admin/invitations" element={<AdminInvitations />} />
+          <Route path="admin/limits" element={<AdminLimits />} />
+          <Route path="admin/audit" element={<AdminAudit />} />
+          <Route path="admin/mail" element={<AdminMail />} />
+          <Route path="admin/mail/:id" element={<AdminMailSheet />} />
+          <Route path="admin/health" element={<AdminHealth />} />
           <Route path="steward" element={<Steward />} />
           <Route path="steward/imports/:id" element={<StewardImport />} />
           <Route path="*" element={<NotFound />} />

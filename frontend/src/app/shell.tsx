@@ -3,6 +3,7 @@ import { Link, NavLink, Outlet, useLocation } from 'react-router';
 import { Pending } from '../components/ui/states.tsx';
 import { mayAct, useSession } from '../features/session/api/get-session.ts';
 import { AccountLinks } from '../features/session/components/account-links.tsx';
+import { AccountUnits } from '../features/session/components/account-units.tsx';
 import { paths } from '../lib/paths.ts';
 import { ErrorBoundary } from './error-boundary.tsx';
 import { Mark } from './mark.tsx';
@@ -47,10 +48,12 @@ function Header() {
         <Way to={paths.home}>Boats</Way>
         <Way to={paths.fit}>Check a fit</Way>
         {mayAct(session.data?.account?.roles, 'steward') && <Way to={paths.steward}>Tables</Way>}
+        {mayAct(session.data?.account?.roles, 'admin') && <Way to={paths.admin}>The site</Way>}
       </nav>
       <div className="-mr-2 ml-auto flex items-center tablet:gap-2">
         <Preferences />
         <AccountLinks />
+        <AccountUnits />
       </div>
     </header>
   );

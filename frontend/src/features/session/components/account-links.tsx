@@ -23,7 +23,10 @@ export function AccountLinks() {
   const signOut = () => end.mutate(undefined, { onSuccess: () => navigate(paths.home) });
   return (
     <>
-      <span className="hidden max-w-40 truncate text-ink-2 tablet:inline">{account.name}</span>
+      <Link to={paths.account} aria-label={`Your account, ${account.name}`} className="flex min-h-11 items-center px-2 text-ink-2">
+        <span className="hidden max-w-40 truncate tablet:inline">{account.name}</span>
+        <span className="tablet:hidden">Account</span>
+      </Link>
       <Button kind="bare" onClick={signOut} busy={end.isPending && 'Signing out'}>
         Sign out
       </Button>

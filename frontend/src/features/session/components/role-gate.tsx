@@ -10,6 +10,8 @@ interface RoleGateProps {
   children: ReactNode;
 }
 
+const article = (role: Role) => (/^[aeiou]/.test(role) ? 'an' : 'a');
+
 /** Shows its children to those who may; everyone else reads why not. The server decides again on every request. */
 export function RoleGate({ needs, what, children }: RoleGateProps) {
   const session = useSession();
@@ -20,7 +22,7 @@ export function RoleGate({ needs, what, children }: RoleGateProps) {
   if (!mayAct(account.roles, needs))
     return (
       <NoPermission>
-        Only a {needs} may {what}. You are signed in as {account.name}.
+        Only {article(needs)} {needs} may {what}. You are signed in as {account.name}.
       </NoPermission>
     );
   return children;
