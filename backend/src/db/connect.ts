@@ -6,6 +6,7 @@ import * as access from './schema/access.ts';
 import * as catalog from './schema/catalog.ts';
 import * as importWork from './schema/import-work.ts';
 import * as imports from './schema/imports.ts';
+import * as jobs from './schema/jobs.ts';
 import * as limits from './schema/limits.ts';
 import * as mail from './schema/mail.ts';
 import * as outbox from './schema/outbox.ts';
@@ -24,6 +25,7 @@ export const schema = {
   ...limits,
   ...savedFits,
   ...webhooks,
+  ...jobs,
 };
 export type Db = BetterSQLite3Database<typeof schema> & { $client: Database.Database };
 
