@@ -1,8 +1,11 @@
 // What riggers know of a short aluminium boat with the sensor 380 mm to starboard. Common practice, no source.
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { clearsAtDeg, shortBoat } from '../support/short-boat.ts';
 
 const powers = [15, 25, 40];
+
+// A busy machine may take its time.
+vi.setConfig({ testTimeout: 60_000 });
 
 describe('a short aluminium boat (common practice, no source)', () => {
   it.each(powers)('with %i hp at motor trim 0 has its port side about half hidden, its starboard side clear', (powerHp) => {

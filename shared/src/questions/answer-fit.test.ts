@@ -1,7 +1,10 @@
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { FitAnswer, FitQuestion } from '../schemas/fit.ts';
 import { answerFit } from './answer-fit.ts';
 import type { HullPart, LowerUnitPart, MountPart, TransducerPart } from './parts.ts';
+
+// A busy machine may take its time.
+vi.setConfig({ testTimeout: 60_000 });
 
 const hull: HullPart = { form: 'shallow-v', lengthM: 4.2, deadriseDeg: 8, transomAngleDeg: 13, material: 'aluminium', strakes: [] };
 const motor: LowerUnitPart = { drive: 'outboard', powerHp: 25, rotation: 'right' };
