@@ -25,6 +25,7 @@ const AdminMail = lazy(() => import('./routes/admin-mail.tsx'));
 const AdminMailSheet = lazy(() => import('./routes/admin-mail-sheet.tsx'));
 const AdminHealth = lazy(() => import('./routes/admin-health.tsx'));
 const Steward = lazy(() => import('./routes/steward.tsx'));
+const StewardEditions = lazy(() => import('./routes/steward-editions.tsx'));
 const StewardImport = lazy(() => import('./routes/steward-import.tsx'));
 const NotFound = lazy(() => import('./routes/not-found.tsx'));
 
@@ -55,6 +56,7 @@ export function Router() {
           <Route path="admin/mail/:id" element={<AdminMailSheet />} />
           <Route path="admin/health" element={<AdminHealth />} />
           <Route path="steward" element={<Steward />} />
+          <Route path="steward/editions" element={<StewardEditions />} />
           <Route path="steward/imports/:id" element={<StewardImport />} />
           <Route path="*" element={<NotFound />} />
         </Route>

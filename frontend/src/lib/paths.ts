@@ -30,6 +30,9 @@ export const paths = {
   adminHealth: '/admin/health',
   steward: '/steward',
   stewardImport: (id: string) => `/steward/imports/${encodeURIComponent(id)}`,
+  stewardEditions: '/steward/editions',
+  /** What one edition changed. */
+  stewardEdition: (n: number) => `/steward/editions?from=${n - 1}&to=${n}`,
 } as const;
 
 /** Only an address of this site, so that a link cannot send someone elsewhere after signing in. */
