@@ -4,9 +4,10 @@ import { PageTitle } from '../../components/ui/page-title.tsx';
 import { Failure, Pending } from '../../components/ui/states.tsx';
 import { useImport } from '../../features/imports/api/get-import.ts';
 import { ImportSheet } from '../../features/imports/components/import-sheet.tsx';
-import { allFates, statusWords, tableWords } from '../../features/imports/import-words.ts';
+import { allFates, statusWords } from '../../features/imports/import-words.ts';
 import { RoleGate } from '../../features/session/components/role-gate.tsx';
 import { paths } from '../../lib/paths.ts';
+import { tableWords } from '../../lib/table-words.ts';
 
 export default function StewardImport() {
   const { id = '' } = useParams();
@@ -51,7 +52,7 @@ function Upload({ id }: { id: string }) {
           Table of {tableWords[record.table]} · {statusWords[record.status]} · uploaded <Day iso={record.createdAt} />
         </p>
       </header>
-      <ImportSheet record={record} fate={fate} />
+      <ImportSheet record={record} fate={fate} atColumns={search.get('step') === 'columns'} />
     </>
   );
 }

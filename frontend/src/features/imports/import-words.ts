@@ -1,14 +1,4 @@
-import type { Table } from '@tiltwright/shared/schemas/catalog-record.ts';
 import type { Fate, FateCounts, ImportStatus } from '@tiltwright/shared/schemas/import.ts';
-
-export const tableWords: Record<Table, string> = {
-  hulls: 'hulls',
-  'lower-units': 'lower units',
-  transducers: 'transducers',
-  mounts: 'mounts',
-  'trim-points': 'measured trim',
-};
-export const allTables = Object.keys(tableWords) as Table[];
 
 export const statusWords: Record<ImportStatus, string> = {
   uploaded: 'uploaded, not yet checked',

@@ -6,10 +6,12 @@ import { checkImport } from './check-import.ts';
 interface Upload {
   table: Table;
   file: File;
+  /** Row of the headings, where it is not found by itself. */
+  headerRow?: number | undefined;
 }
 
-/** Sends the file and has its rows checked at once; gives the import's id. A check that does not start is told on the import's own page. */
-async function uploadTable({ table, file }: Upload): Promise<string> {
+/** Sends the file and has its rows checked at once; gives the import's id. Where its columns have to be mapped first its own page says so. */
+async function uploadTable({ table, file, headerRow }: Upload): Promise<string> {
   const { id } = await bodyOf(
     api.POST('/imports', {
       // The document describes the file as a string of bytes; a form carries the file itself.
@@ -17,6 +19,7 @@ async function uploadTable({ table, file }: Upload): Promise<string> {
       bodySerializer: () => {
         const form = new FormData();
         form.append('table', table);
+        if (headerRow !== undefined) form.append('headerRow', String(headerRow));
         form.append('file', file);
         return form;
       },

@@ -4,8 +4,9 @@ import { Day } from '../../../components/ui/day.tsx';
 import { Empty, Failure, Pending } from '../../../components/ui/states.tsx';
 import { DataTable, NotNoted, type TableColumn } from '../../../components/ui/table.tsx';
 import { paths } from '../../../lib/paths.ts';
+import { tableWords } from '../../../lib/table-words.ts';
 import { useImports } from '../api/list-imports.ts';
-import { countOf, publishableWords, statusWords, tableWords } from '../import-words.ts';
+import { countOf, publishableWords, statusWords } from '../import-words.ts';
 
 const columns: readonly TableColumn<Import>[] = [
   {

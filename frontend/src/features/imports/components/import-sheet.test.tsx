@@ -28,7 +28,7 @@ const checked: Import = {
   createdAt: '2026-05-04T08:00:00.000Z',
   createdBy: 'usr_1',
 };
-const row = { record: null, errors: [], cautions: [], changes: [], cells: {} };
+const row = { record: null, errors: [], cautions: [], changes: [], cells: {}, edits: {}, decision: null, resolution: null };
 const rows = [
   {
     ...row,
@@ -127,12 +127,6 @@ describe('a table in another state', () => {
     show({ ...checked, status: 'checking', counts: null, checkedRows: 320, rows: 800 });
     expect(screen.getByRole('status')).toHaveTextContent('320 of 800 rows checked');
     expect(screen.getByRole('progressbar')).toHaveAttribute('value', '320');
-  });
-
-  it('with headings of its own says what to do', () => {
-    server(() => Response.json({}));
-    show({ ...checked, status: 'uploaded', counts: null, needsMapping: true });
-    expect(screen.getByText('Its headings are in words of their own.')).toBeInTheDocument();
   });
 
   it('that could not be read says why', () => {

@@ -2,12 +2,10 @@ import type { FateCounts } from '@tiltwright/shared/schemas/import.ts';
 import { type FormEvent, useId, useState } from 'react';
 import { Button } from '../../../components/ui/button.tsx';
 import { Dialog } from '../../../components/ui/dialog.tsx';
-import { Failure, Notice } from '../../../components/ui/states.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
-import { ProblemError } from '../../../lib/problem.ts';
-import { useCheckImport } from '../api/check-import.ts';
 import { usePublishImport } from '../api/publish-import.ts';
 import { leftOutWords, publishableWords } from '../import-words.ts';
+import { StaleCatalog } from './stale-catalog.tsx';
 
 interface PublishDialogProps {
   id: string;
@@ -35,7 +33,14 @@ export function PublishDialog({ id, counts, open, onOpenChange }: PublishDialogP
       open={open}
       onOpenChange={onOpenChange}
       title="Publish this table?"
-      description={`${publishableWords(counts) ?? 'Nothing'} will become a new edition that everyone sees at once. ${left ? `${left}.` : 'No row is left out.'}`}
+      description={
+        <>
+          <p>
+            {publishableWords(counts) ?? 'Nothing'} will become a new edition that everyone sees at once. {left && `${left}.`}
+          </p>
+          <p className="mt-2">Rows you left out stay out, and so do rows with “look again” that you have not ticked.</p>
+        </>
+      }
       actions={
         <>
           <Button onClick={() => onOpenChange(false)}>Not yet</Button>
@@ -55,22 +60,7 @@ export function PublishDialog({ id, counts, open, onOpenChange }: PublishDialogP
           error={missing && why.trim() === '' ? 'Say in a few words why.' : null}
         />
       </form>
-      {publish.isError && <Refused id={id} error={publish.error} onChecking={() => onOpenChange(false)} />}
+      {publish.isError && <StaleCatalog id={id} error={publish.error} what="publish the table" onChecking={() => onOpenChange(false)} />}
     </Dialog>
-  );
-}
-
-function Refused({ id, error, onChecking }: { id: string; error: unknown; onChecking: () => void }) {
-  const check = useCheckImport(id);
-  if (!(error instanceof ProblemError) || error.problem.code !== 'stale-edition') return <Failure error={error} what="publish the table" />;
-  return (
-    <div className="flex flex-col items-start gap-3">
-      <Notice tone="care" role="alert" title="The catalog has changed since this table was checked.">
-        <p className="text-ink-2">Its rows have to be judged against the catalog as it stands now.</p>
-      </Notice>
-      <Button onClick={() => check.mutate(undefined, { onSuccess: onChecking })} busy={check.isPending && 'Starting …'}>
-        Check again
-      </Button>
-    </div>
   );
 }

@@ -4,9 +4,10 @@ import { Button } from '../../../components/ui/button.tsx';
 import { controlClass, Field } from '../../../components/ui/field.tsx';
 import { Select } from '../../../components/ui/select.tsx';
 import { Failure } from '../../../components/ui/states.tsx';
-import { ProblemError } from '../../../lib/problem.ts';
+import { TextInput } from '../../../components/ui/text-input.tsx';
+import { hasCode, ProblemError } from '../../../lib/problem.ts';
+import { allTables, tableWords } from '../../../lib/table-words.ts';
 import { useUploadTable } from '../api/upload-table.ts';
-import { allTables, tableWords } from '../import-words.ts';
 
 const choices = allTables.map((value) => ({ value, label: tableWords[value] }));
 
@@ -15,14 +16,20 @@ export function UploadForm({ onUploaded }: { onUploaded: (id: string) => void })
   const upload = useUploadTable();
   const [table, setTable] = useState<Table>('hulls');
   const [missing, setMissing] = useState(false);
+  const [headingRow, setHeadingRow] = useState('');
   const file = useRef<HTMLInputElement>(null);
 
   const send = (event: FormEvent) => {
     event.preventDefault();
     const picked = file.current?.files?.[0];
     setMissing(!picked);
+    const row = Number(headingRow);
     if (!picked) file.current?.focus();
-    else upload.mutate({ table, file: picked }, { onSuccess: onUploaded, onError: () => file.current?.focus() });
+    else
+      upload.mutate(
+        { table, file: picked, headerRow: Number.isInteger(row) && row > 0 ? row : undefined },
+        { onSuccess: onUploaded, onError: () => file.current?.focus() },
+      );
   };
 
   const refusal = fileRefusal(upload.error);
@@ -32,7 +39,7 @@ export function UploadForm({ onUploaded }: { onUploaded: (id: string) => void })
       <Select label="Table" choices={choices} value={table} onChange={setTable} />
       <Field
         label="File"
-        help="Text with commas, semicolons or tabs, its headings as in our own tables. Nothing is published yet."
+        help="Text with commas, semicolons or tabs. Its headings may be its own: what each column holds is asked next. Nothing is published yet."
         error={missing ? 'Choose a file.' : refusal}
       >
         {(control) => (
@@ -46,6 +53,16 @@ export function UploadForm({ onUploaded }: { onUploaded: (id: string) => void })
           />
         )}
       </Field>
+      {(headingRow !== '' || hasCode(upload.error, 'no-header')) && (
+        <TextInput
+          label="Row of the headings"
+          help="Counted from 1, as a spreadsheet does. The headings may be in words of their own: the next page asks what each column holds."
+          inputMode="numeric"
+          maxLength={4}
+          value={headingRow}
+          onChange={(event) => setHeadingRow(event.target.value)}
+        />
+      )}
       <Button kind="main" type="submit" busy={upload.isPending && 'Uploading …'} className="self-start">
         Upload and check
       </Button>
@@ -56,8 +73,9 @@ export function UploadForm({ onUploaded }: { onUploaded: (id: string) => void })
 /** What is wrong with the file itself belongs beside the file; anything else is an error of the page. */
 function fileRefusal(error: unknown): string | null {
   if (!(error instanceof ProblemError)) return null;
-  const { status, detail, issues } = error.problem;
+  const { status, code, detail, issues } = error.problem;
   if (status === 413) return detail;
+  if (code === 'no-header') return detail;
   const about = issues.find((issue) => issue.path === '/file');
   return about ? about.message : null;
 }
