@@ -10,8 +10,8 @@ const { dataFolder, uploadsFolder } = workerData as WorkerFolders;
 const db = connect(databaseFile(dataFolder));
 // Rows by the ten thousand: copying the log back after every 4 MB would write most pages twice.
 db.$client.pragma('wal_autocheckpoint = 16000');
-// 96 MB of pages: the indexes of 100 000 hulls are looked into all over.
-db.$client.pragma('cache_size = -96000');
+// 64 MB of pages: the indexes of 100 000 hulls are looked into all over.
+db.$client.pragma('cache_size = -64000');
 let last: Promise<void> = Promise.resolve();
 
 async function answer(seq: number, order: ImportOrder): Promise<void> {

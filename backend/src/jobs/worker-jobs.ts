@@ -27,7 +27,7 @@ interface Waiting {
 const idleMs = 60_000;
 
 /** Rows live for one batch: with room for several, few are carried from one generation to the next. */
-const youngMb = 96;
+const youngMb = 48;
 
 /** @param entry file of the worker's bundle */
 export function workerJobs(entry: string, folders: WorkerFolders): ImportJobs {

@@ -94,27 +94,43 @@ async function judgeRows({ db, config }: CheckDeps, id: string): Promise<void> {
   const judge = rowJudge(db, record.table, (n) => read(n, batch.find((row) => row.n === n)?.cells ?? store.cells(n)));
   let [passed, kept] = [0, done];
 
+  // One read transaction a batch: beginning one for each look-up costs more than the look-up.
+  const reading = readTransaction(db);
   const keep = (): boolean => {
+    reading.end();
     const stillWanted = keepBatch(db, id, store, batch, kept);
     kept += batch.length;
     batch = [];
     return stillWanted;
   };
   let wanted = true;
-  eachRow(bytes, table, (n, cells) => {
-    if (passed++ < done) {
-      const rowKey = known.get(n);
-      if (rowKey !== undefined) judge.noteDone(n, rowKey, read(n, cells));
-      return true;
-    }
-    const judged = judge.judge(n, read(n, cells), edits.get(n)?.resolution ?? null);
-    counts[judged.fate]++;
-    batch.push({ n, cells, judged });
-    if (batch.length >= rowsAtOnce) wanted = keep();
-    return wanted;
-  });
-  if (wanted && batch.length > 0) wanted = keep();
+  try {
+    eachRow(bytes, table, (n, cells) => {
+      if (passed++ < done) {
+        const rowKey = known.get(n);
+        if (rowKey !== undefined) judge.noteDone(n, rowKey, read(n, cells));
+        return true;
+      }
+      reading.begin();
+      const judged = judge.judge(n, read(n, cells), edits.get(n)?.resolution ?? null);
+      counts[judged.fate]++;
+      batch.push({ n, cells, judged });
+      if (batch.length >= rowsAtOnce) wanted = keep();
+      return wanted;
+    });
+    if (wanted && batch.length > 0) wanted = keep();
+  } finally {
+    reading.end();
+  }
   if (wanted) finishCheck(db, id, { counts, rows: kept, header: table.header });
+}
+
+/** Sees the catalog as it was when it began; never open while anything is written. */
+function readTransaction({ $client: sqlite }: Db): { begin(): void; end(): void } {
+  return {
+    begin: () => void (sqlite.inTransaction || sqlite.exec('BEGIN')),
+    end: () => void (sqlite.inTransaction && sqlite.exec('COMMIT')),
+  };
 }
 
 interface JudgedRow {
