@@ -8,7 +8,7 @@ import { type Fan, fanOf, type Side } from './fan.ts';
 import { diffractionMarginM, nearestPass } from './least-clearance.ts';
 import { clearShare, type Sector, sectorsOf } from './sectors.ts';
 import { type SeenSolid, seenAll, seenBy } from './seen-solid.ts';
-import { castSlab, slabShare } from './slab.ts';
+import { castSlab, hidesAlone, slabShare } from './slab.ts';
 
 export interface SideClearance {
   verdict: SideVerdict;
@@ -70,12 +70,11 @@ export function tiltWindow(
     const before = known.get(step);
     if (before !== undefined) return before;
     const sensor = poseAt(step * windowStepRad);
-    const share = (seen: readonly SeenSolid[], side: Side) => slabShare(seen, element, fan, side, clearFrom);
-    let clear = suspect === null || share([seenBy(sensor, suspect.solid)], suspect.side) >= clearFrom;
+    let clear = suspect === null || !hidesAlone(seenBy(sensor, suspect.solid), element, fan, suspect.side, clearFrom);
     if (clear) {
       const seen = seenAll(sensor, solids);
-      clear = sides.every((side) => share(seen, side) >= clearFrom);
-      if (!clear) suspect = suspectAmong(seen, sides, (one, side) => share([one], side) < clearFrom);
+      clear = sides.every((side) => slabShare(seen, element, fan, side, clearFrom) >= clearFrom);
+      if (!clear) suspect = suspectAmong(seen, sides, (one, side) => hidesAlone(one, element, fan, side, clearFrom));
     }
     known.set(step, clear);
     return clear;

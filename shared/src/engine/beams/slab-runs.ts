@@ -28,7 +28,7 @@ export function rayDirection(side: Side, depressionRad: number, alongRad: number
 }
 
 /**
- * Marks the cells one solid takes, in every direction of a span, and adds what it takes alone to `own`, weighed by its opacity.
+ * Marks the cells one solid takes, in every direction of a span, and puts what it takes alone into `own`, weighed by its opacity.
  * Answers the two-way weight it takes alone; stops once that passes the budget.
  */
 export function markRuns(
@@ -37,7 +37,7 @@ export function markRuns(
   element: SideElement,
   fan: Fan,
   side: Side,
-  cells: Int32Array,
+  cells: Int32Array | null,
   limitM: number,
   own: Float64Array | null,
   budget: number,
@@ -73,8 +73,7 @@ export function markRuns(
       if (!(from <= to)) continue;
       const taken = shadow.lowExact && shadow.highExact ? (2 << to) - (1 << from) : testCells(solid, family, from, to, element.apertureM);
       if (taken === 0) continue;
-      const at = step * ways + way;
-      cells[at] = (cells[at] as number) | taken;
+      if (cells) cells[step * ways + way] = (cells[step * ways + way] as number) | taken;
       rays += bitCount(taken);
     }
     if (rays === 0) continue;

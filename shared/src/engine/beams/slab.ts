@@ -89,6 +89,14 @@ export function slabShare(solids: readonly SeenSolid[], element: SideElement, fa
   return Math.min(1, Math.max(0, 1 - lost / raysADirection / fan.totalWeight));
 }
 
+/** Whether one solid by itself leaves a side less than a clear share of `least`. */
+export function hidesAlone(seen: SeenSolid, element: SideElement, fan: Fan, side: Side, least: number): boolean {
+  const span = depressionSpan(seen, side, fan, element, reachM);
+  if (!span) return false;
+  const budget = (1 - least + 1e-12) * fan.totalWeight;
+  return markRuns(seen, span, element, fan, side, null, reachM, null, budget) > budget;
+}
+
 /** Rays lost in one direction, of its aperture's cells. */
 function lostAt({ opaque, veils }: Taken, at: number): number {
   const hidden = opaque[at] as number;
