@@ -1,11 +1,9 @@
 import { expect, test } from '@playwright/test';
-import { Secret, TOTP } from 'otpauth';
+import { oneTimeCode } from '../support/one-time-code.ts';
 import { complaintsOf, expectSoundPage, signIn } from './page-checks.ts';
 
 /** Both sizes run against one server: each has people of its own. */
 const address = (name: string, project: string) => `${name}-${project}@tiltwright.example`;
-const codeOf = (secret: string, ahead = 0) =>
-  new TOTP({ secret: Secret.fromBase32(secret) }).generate({ timestamp: Date.now() + ahead * 30_000 });
 
 test('a newcomer signs up, follows the mail’s link, is signed in, and turns a second factor on', async ({ page }, { project }) => {
   test.slow();
@@ -39,7 +37,7 @@ test('a newcomer signs up, follows the mail’s link, is signed in, and turns a 
   await page.getByLabel('Password', { exact: true }).fill('twelve or more');
   await page.getByRole('button', { name: 'Set it up' }).click();
   const key = (await page.getByText(/^([A-Z2-7]{4} ){7}[A-Z2-7]{4}$/).textContent())!.replaceAll(' ', '');
-  await page.getByLabel('Code').fill(codeOf(key));
+  await page.getByLabel('Code').fill(oneTimeCode(key));
   await page.getByRole('button', { name: 'Turn it on' }).click();
   await expect(page.getByRole('heading', { name: /recovery codes/ })).toBeFocused();
   await expectSoundPage(page);
@@ -53,7 +51,7 @@ test('a newcomer signs up, follows the mail’s link, is signed in, and turns a 
   await page.getByRole('main').getByRole('button', { name: 'Sign in' }).click();
   await expect(page.getByLabel('Code')).toBeFocused();
   await expectSoundPage(page);
-  await page.getByLabel('Code').fill(codeOf(key, 1));
+  await page.getByLabel('Code').fill(oneTimeCode(key, 1));
   await page.getByRole('main').getByRole('button', { name: 'Sign in' }).click();
   await expect(page.getByRole('button', { name: 'Sign out' })).toBeVisible();
 

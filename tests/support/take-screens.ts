@@ -84,7 +84,13 @@ const screens: Screen[] = [
   { name: 'sign-in', open: go('/sign-in') },
   { name: 'sign-up', open: go('/sign-up') },
   { name: 'sign-up-asked', open: asked },
-  { name: 'outbox', open: async (page) => (await asked(page), page.getByRole('link', { name: 'Read the mail' }).click()) },
+  {
+    name: 'outbox',
+    open: async (page) => {
+      await asked(page);
+      await page.getByRole('link', { name: 'Read the mail' }).click();
+    },
+  },
   { name: 'reset', open: go('/reset') },
   { name: 'link-not-whole', open: go('/verify') },
   { name: 'account', as: 'customer', open: go('/account') },

@@ -1,5 +1,6 @@
 import { Secret } from 'otpauth';
 import { describe, expect, it } from 'vitest';
+import { oneTimeCode } from '../../../tests/support/one-time-code.ts';
 import { factorUri, hashRecoveryCode, newFactorSecret, newRecoveryCodes, openSecret, sealSecret, stepOfCode } from './second-factor.ts';
 
 // RFC 6238, appendix B, SHA-1 rows; the table's eight digits end in the six a six-digit code has (RFC 4226, 5.3).
@@ -16,6 +17,12 @@ const secret = Secret.fromUTF8('12345678901234567890').base32;
 describe('codes', () => {
   it.each(published)('at %i s the code is the end of %s', (timeS, eightDigits) => {
     expect(stepOfCode(secret, eightDigits.slice(2), 0, timeS * 1000)).toBe(Math.floor(timeS / 30));
+  });
+
+  it('is what an authenticator made from the two RFCs shows', () => {
+    const own = newFactorSecret();
+    const nowMs = Date.now();
+    expect(stepOfCode(own, oneTimeCode(own, 0, nowMs), 0, nowMs)).toBe(Math.floor(nowMs / 30_000));
   });
 
   it('works once: the same step is not taken again, a newer one is', () => {

@@ -1,8 +1,8 @@
 import { BegunSecondFactor, RecoveryCodes, SecondFactor } from '@tiltwright/shared/schemas/access.ts';
 import { Session } from '@tiltwright/shared/schemas/account.ts';
-import { Secret, TOTP } from 'otpauth';
 import type TestAgent from 'supertest/lib/agent.js';
 import { expect, test } from 'vitest';
+import { oneTimeCode } from '../../../../tests/support/one-time-code.ts';
 import { mailsTo } from '../../../../tests/support/people.ts';
 import { expectProblem, parsed, testApp } from '../../../../tests/support/test-app.ts';
 import { secondFactors } from '../../db/schema/access.ts';
@@ -11,17 +11,13 @@ import { demoPassword } from '../../db/seed.ts';
 const address = '/api/v1/me/second-factor';
 const steward = { email: 'steward@tiltwright.example', password: demoPassword };
 
-/** An authenticator, `ahead` steps of 30 s into the future: a code works once, and a test does not wait for the next. */
-const codeOf = (secret: string, ahead = 0) =>
-  new TOTP({ secret: Secret.fromBase32(secret) }).generate({ timestamp: Date.now() + ahead * 30_000 });
-
 async function setUp(agent: TestAgent) {
   const { secret, uri } = parsed(BegunSecondFactor, await agent.post(address).send({ password: demoPassword }).expect(201));
   const { codes } = parsed(
     RecoveryCodes,
     await agent
       .post(`${address}/confirm`)
-      .send({ code: codeOf(secret) })
+      .send({ code: oneTimeCode(secret) })
       .expect(200),
   );
   return { secret, uri, codes };
@@ -30,7 +26,7 @@ async function setUp(agent: TestAgent) {
 test('once confirmed, signing in needs a code, each of which works once', async () => {
   const app = testApp();
   const agent = await app.as('steward');
-  const { secret, uri } = await setUp(agent);
+  const { secret, uri, used } = await setUp(agent);
   expect(uri).toContain(`secret=${secret}`);
   expect(parsed(SecondFactor, await agent.get(address))).toMatchObject({ enabled: true, recoveryCodesLeft: 10, demanded: false });
   expect(mailsTo(app.db, steward.email)[0]!.kind).toBe('second-factor-changed');
@@ -40,8 +36,8 @@ test('once confirmed, signing in needs a code, each of which works once', async 
   expectProblem(await device.post('/api/v1/session').send(steward), 'second-factor-needed');
   expect(parsed(Session, await device.get('/api/v1/session')).account).toBeNull();
   expectProblem(await device.post('/api/v1/session').send({ ...steward, code: '000000' }), 'wrong-code');
-  expectProblem(await device.post('/api/v1/session').send({ ...steward, code: codeOf(secret) }), 'wrong-code');
-  const code = codeOf(secret, 1);
+  expectProblem(await device.post('/api/v1/session').send({ ...steward, code: used }), 'wrong-code');
+  const code = oneTimeCode(secret, 1);
   const session = parsed(
     Session,
     await device
@@ -79,7 +75,7 @@ test('a recovery code signs in once; new ones end the old', async () => {
     .expect(200);
   expectProblem(await device.post('/api/v1/session').send({ ...steward, code: codes[0] }), 'wrong-code');
   expect(parsed(SecondFactor, await agent.get(address)).recoveryCodesLeft).toBe(9);
-  const renewed = await agent.post(`${address}/recovery-codes`).send({ code: codeOf(secret, 1) });
+  const renewed = await agent.post(`${address}/recovery-codes`).send({ code: oneTimeCode(secret, 1) });
   const fresh = parsed(RecoveryCodes, renewed).codes;
   expectProblem(await device.post('/api/v1/session').send({ ...steward, code: codes[1] }), 'wrong-code');
   await device
@@ -98,7 +94,7 @@ test('guessing codes has to stop after ten, from whichever address', async () =>
       .set('X-Forwarded-For', `192.0.2.${from}`)
       .send({ ...steward, code });
   for (let n = 0; n < 10; n++) expectProblem(await guess(n, '000000'), 'wrong-code');
-  expectProblem(await guess(11, codeOf(secret, 1)), 'too-many-requests');
+  expectProblem(await guess(11, oneTimeCode(secret, 1)), 'too-many-requests');
 });
 
 test('setting up and removing need the password; removing is told by mail', async () => {

@@ -7,6 +7,7 @@ import { Day } from '../../../components/ui/day.tsx';
 import { Dialog } from '../../../components/ui/dialog.tsx';
 import { RoleBoxes } from '../../../components/ui/role-boxes.tsx';
 import { Failure, Notice } from '../../../components/ui/states.tsx';
+import { formatMoment } from '../../../lib/format-date.ts';
 import { paths } from '../../../lib/paths.ts';
 import { type PersonOrder, useChangePerson, usePersonSessions } from '../api/people.ts';
 
@@ -113,14 +114,7 @@ function Sessions({ id }: { id: string }) {
         <ul>
           {data.map((session) => (
             <li key={session.id} className="border-b border-rule py-2">
-              {session.startedAt ? (
-                <>
-                  since <Day iso={session.startedAt} />
-                </>
-              ) : (
-                'a device'
-              )}
-              , ends by itself <Day iso={session.expiresAt} />
+              {session.startedAt ? `since ${formatMoment(session.startedAt)}` : 'a device'}, ends by itself <Day iso={session.expiresAt} />
             </li>
           ))}
         </ul>
