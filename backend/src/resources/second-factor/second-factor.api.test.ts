@@ -13,14 +13,9 @@ const steward = { email: 'steward@tiltwright.example', password: demoPassword };
 
 async function setUp(agent: TestAgent) {
   const { secret, uri } = parsed(BegunSecondFactor, await agent.post(address).send({ password: demoPassword }).expect(201));
-  const { codes } = parsed(
-    RecoveryCodes,
-    await agent
-      .post(`${address}/confirm`)
-      .send({ code: oneTimeCode(secret) })
-      .expect(200),
-  );
-  return { secret, uri, codes };
+  const used = oneTimeCode(secret);
+  const { codes } = parsed(RecoveryCodes, await agent.post(`${address}/confirm`).send({ code: used }).expect(200));
+  return { secret, uri, codes, used };
 }
 
 test('once confirmed, signing in needs a code, each of which works once', async () => {
