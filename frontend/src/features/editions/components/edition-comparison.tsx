@@ -109,13 +109,18 @@ const columns: readonly TableColumn<ListedDifference>[] = [
   },
 ];
 
+/** They stand beside a new record as its name. */
+const nameFields = new Set(['maker', 'model', 'package', 'hullMaker', 'hullModel', 'hullPackage']);
+
 function Changes({ difference: { kind, isNew, changes } }: { difference: ListedDifference }) {
+  const told = isNew ? changes.filter(({ field }) => field === undefined || !nameFields.has(field)) : changes;
   if (changes.length === 0) return <span className="text-ink-2">Came back to what it was.</span>;
   return (
     <>
       {isNew && <p className="font-firm">New.</p>}
-      <ul className="text-note">
-        {changes.map(({ field = '', before, after }) => (
+      {/* A new record says a lot: side by side it stays short. */}
+      <ul className={isNew ? 'flex flex-wrap gap-x-4 text-note' : 'text-note'}>
+        {told.map(({ field = '', before, after }) => (
           <li key={field}>
             <FieldChangeWords table={kind} field={field} before={before} after={after} isNew={isNew} />
           </li>

@@ -74,7 +74,7 @@ function columnsFor(ask: (edition: Edition) => void): readonly TableColumn<Editi
       header: 'What can be done',
       narrow: 'body',
       cell: ({ row: { original } }) => (
-        <div className="-ml-2 flex flex-wrap items-center tablet:justify-end">
+        <div className="-ml-2 flex flex-wrap items-center">
           <Link to={paths.stewardEdition(original.edition)} preventScrollReset className="inline-flex min-h-11 items-center px-2">
             What it changed<span className="sr-only">, edition {original.edition}</span>
           </Link>

@@ -163,6 +163,9 @@ function ToDecide({ record }: { record: Import }) {
       <div role="status">
         <p className="text-lead font-firm">{publishable ? `${publishable} to publish.` : 'Nothing to publish.'}</p>
         <p className="text-ink-2">{left ? `${left}.` : 'No row is left out.'}</p>
+        {publishable && (
+          <p className="text-ink-2">A row that says “look again” goes along once you have ticked it; one you leave out stays out.</p>
+        )}
       </div>
       <div className="flex flex-wrap gap-3">
         {publishable && (
@@ -234,7 +237,7 @@ function LeftOutColumns({ record: { unknownColumns, status } }: { record: Import
   const cells = unknownColumns.length === 1 ? 'its cells' : 'their cells';
   const leftOut = `${cells} ${status === 'published' ? 'were' : 'will be'} left out`;
   return (
-    <Notice tone="care" title={`${countOf(unknownColumns.length, 'column', 'columns')} not known: ${leftOut}.`}>
+    <Notice tone="care" title={`${countOf(unknownColumns.length, 'column is', 'columns are')} not read: ${leftOut}.`}>
       <p className="text-ink-2">{unknownColumns.join(', ')}</p>
     </Notice>
   );

@@ -32,7 +32,7 @@ export function RowFindings({ row, table, mend }: RowFindingsProps) {
         </Cell>
       ))}
       {cautions.map((caution) => (
-        <Cell key={`${caution.column} ${caution.code}`} problem={caution} tone="border-brass" word="look again" />
+        <Cell key={`${caution.column} ${caution.code}`} problem={caution} tone="border-brass" word="look again" isCaution />
       ))}
       {row.fate === 'new' && changes.length > 0 && <li className="text-note">{newValues(changes, table, units)}</li>}
       {row.fate !== 'new' &&
@@ -65,13 +65,15 @@ interface CellProps {
   problem: CellProblem;
   tone: string;
   word: string;
+  /** Its word is shown: the ticks speak of it. */
+  isCaution?: boolean;
   children?: ReactNode;
 }
 
-function Cell({ problem, tone, word, children }: CellProps) {
+function Cell({ problem, tone, word, isCaution = false, children }: CellProps) {
   return (
     <li className={`border-l-[3px] pl-2 ${tone}`}>
-      <span className="sr-only">{word}: </span>
+      <span className={isCaution ? 'text-note' : 'sr-only'}>{word}: </span>
       <code className="font-sans font-firm">{problem.column}</code> {problem.value !== '' && <q className="break-all">{problem.value}</q>}
       <span className="block text-note">{problem.message}</span>
       {children}

@@ -1,4 +1,4 @@
-import { columnsOf, findColumn } from '@tiltwright/shared/csv/columns.ts';
+import { findColumn } from '@tiltwright/shared/csv/columns.ts';
 import type { Table } from '@tiltwright/shared/schemas/catalog-record.ts';
 import type { CellProblem } from '@tiltwright/shared/schemas/import.ts';
 import { useRef, useState } from 'react';
@@ -36,7 +36,9 @@ export function RowReview({ id, table, row, isOpen, onTouched, onAllMended }: Ro
     setSaid(words);
     setOther('');
     // Once the button that was pressed is gone the focus would fall off the page.
-    requestAnimationFrame(() => word.current?.focus());
+    requestAnimationFrame(() => {
+      if (document.activeElement === document.body) word.current?.focus();
+    });
   };
   const mended = (after: ListedRow) =>
     done(after, after.fate === 'error' ? `Row ${after.n} is still wrong.` : `Mended: row ${after.n} is ${fateWords[after.fate]} now.`);
@@ -55,25 +57,28 @@ export function RowReview({ id, table, row, isOpen, onTouched, onAllMended }: Ro
       </p>
       {isOpen && (
         <>
-          <RowDecision id={id} row={row} onDecided={(after, words) => done(after, `Row ${row.n} ${words}.`)} />
           <Edits id={id} table={table} row={row} onBack={(after) => done(after, `Taken back: row ${row.n} reads as in the file.`)} />
-          {row.fate !== 'unchanged' && (
-            <details>
-              <summary className="flex min-h-11 w-fit items-center text-note text-ink-2 underline underline-offset-4">
-                The whole row<span className="sr-only">, row {row.n}</span>
-              </summary>
-              <FileCells cells={row.cells} />
-              <Select
-                label="Mend another cell"
-                className="max-w-[28rem]"
-                none="choose which"
-                choices={columnChoices(table).filter(({ value }) => columnsOf(table).some(({ column }) => column === value))}
-                value={other}
-                onChange={setOther}
-              />
-              {other !== '' && form(other, row.edits[other] ?? row.cells[other] ?? '', false)}
-            </details>
-          )}
+          <RowDecision id={id} row={row} onDecided={(after, words) => done(after, `Row ${row.n} ${words}.`)}>
+            {row.fate !== 'unchanged' && (
+              <details className="min-w-0 open:basis-full">
+                <summary className="flex min-h-11 w-fit items-center px-2 text-ink-2 underline underline-offset-4">
+                  The whole row<span className="sr-only">, row {row.n}</span>
+                </summary>
+                <div className="border-l border-rule pb-2 pl-3 ml-2">
+                  <FileCells cells={row.cells} />
+                  <Select
+                    label="Mend another cell"
+                    className="max-w-[28rem]"
+                    none="choose which"
+                    choices={columnChoices(table).filter(({ value }) => findColumn(table, value))}
+                    value={other}
+                    onChange={setOther}
+                  />
+                  {other !== '' && form(other, row.edits[other] ?? row.cells[other] ?? '', false)}
+                </div>
+              </details>
+            )}
+          </RowDecision>
         </>
       )}
     </div>
