@@ -15,7 +15,7 @@ const columns: readonly TableColumn<Mail>[] = [
     narrow: 'head',
     accessorKey: 'subject',
     cell: ({ row: { original } }) => (
-      <Link to={paths.adminMailSheet(original.id)} className="inline-flex min-h-11 items-center">
+      <Link to={paths.adminMailSheet(original.id)} className="-my-2.5 inline-flex min-h-11 items-center">
         {original.subject}
       </Link>
     ),

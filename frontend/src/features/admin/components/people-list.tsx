@@ -15,7 +15,7 @@ const columns: readonly TableColumn<Person>[] = [
     narrow: 'head',
     accessorKey: 'name',
     cell: ({ row: { original } }) => (
-      <Link to={paths.adminPerson(original.id)} className="inline-flex min-h-11 items-center break-words">
+      <Link to={paths.adminPerson(original.id)} className="-my-2.5 inline-flex min-h-11 items-center break-words">
         {original.name}
       </Link>
     ),
