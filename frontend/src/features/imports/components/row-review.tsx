@@ -1,7 +1,7 @@
 import { findColumn } from '@tiltwright/shared/csv/columns.ts';
 import type { Table } from '@tiltwright/shared/schemas/catalog-record.ts';
 import type { CellProblem } from '@tiltwright/shared/schemas/import.ts';
-import { useRef, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { Button } from '../../../components/ui/button.tsx';
 import { Select } from '../../../components/ui/select.tsx';
 import type { ListedRow } from '../api/list-import-rows.ts';
@@ -28,17 +28,17 @@ const wholeRow = new Set(['same-as-row', 'same-record-twice']);
 
 /** What there is to see in a row, and what can be done about it. What was done is said, and takes the focus, in its place. */
 export function RowReview({ id, table, row, isOpen, onTouched, onAllMended }: RowReviewProps) {
-  const [said, setSaid] = useState('');
+  const [said, setSaid] = useState({ words: '' });
   const [other, setOther] = useState('');
   const word = useRef<HTMLParagraphElement>(null);
+  // Once what was pressed is gone the focus would fall off the page.
+  useEffect(() => {
+    if (said.words !== '' && document.activeElement === document.body) word.current?.focus();
+  }, [said]);
   const done = (after: ListedRow, words: string) => {
     onTouched(after);
-    setSaid(words);
+    setSaid({ words });
     setOther('');
-    // Once the button that was pressed is gone the focus would fall off the page.
-    requestAnimationFrame(() => {
-      if (document.activeElement === document.body) word.current?.focus();
-    });
   };
   const mended = (after: ListedRow) =>
     done(after, after.fate === 'error' ? `Row ${after.n} is still wrong.` : `Mended: row ${after.n} is ${fateWords[after.fate]} now.`);
@@ -52,8 +52,8 @@ export function RowReview({ id, table, row, isOpen, onTouched, onAllMended }: Ro
   return (
     <div className="flex flex-col gap-1">
       <RowFindings row={row} table={table} mend={mend} />
-      <p ref={word} tabIndex={-1} role="status" className={said ? 'font-firm' : 'sr-only'}>
-        {said}
+      <p ref={word} tabIndex={-1} role="status" className={said.words ? 'font-firm' : 'sr-only'}>
+        {said.words}
       </p>
       {isOpen && (
         <>
