@@ -119,6 +119,9 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     throw new StartProblem(`The setting ${String(issue.path[0])} is not usable: ${issue.message}.`);
   }
   const settings = parsed.data;
+  // The demo accounts' password stands in the readme: a trial is for this machine alone.
+  if (settings.NODE_ENV === 'trial' && !/^(127\.|::1$|localhost$)/.test(settings.HOST))
+    throw new StartProblem('A trial listens on this machine only; to be reached from others set NODE_ENV=production.');
   const dataFolder = path.resolve(topFolder, settings.DATA_DIR);
   const uploadsFolder = path.join(dataFolder, 'uploads');
   const outboxFolder = path.join(dataFolder, 'outbox');

@@ -32,13 +32,14 @@ async function start(): Promise<void> {
   if (config.mode !== 'production') await seedDemoWorld(db, config, seedsFolder);
   const logger = pino({ level: config.logLevel });
   const deps = createDeps(db, config, { jobs: importJobs(db, config), pool: fitPool(config.fitThreads) });
+  const app = createApp(deps, logger);
+  // First the port, then the work left over: where another server has both port and folder, nothing of its is touched.
+  const server = await listen(app.listen.bind(app), config);
   recoverImports(db, deps.jobs, (error) => logger.error({ err: error }, 'a check taken up again failed'));
   const flushing = setInterval(() => {
     if (!deps.jobs.isWriting()) deps.usage.flush();
   }, flushEveryMs).unref();
   const stopWebhooks = startWebhookWorker(db, config, logger, () => !deps.jobs.isWriting());
-  const app = createApp(deps, logger);
-  const server = await listen(app.listen.bind(app), config);
   const { port } = server.address() as AddressInfo;
   // Any free port is known only now; links in mails begin with it.
   if (config.port === 0 && process.env.SITE_URL === undefined) config.siteUrl = siteAddress(config, port);
@@ -107,7 +108,7 @@ function greet(config: Config, port: number): void {
   const address = siteAddress(config, port);
   const lines = [`Tiltwright is ready on ${address}`, `API: ${address}/api/docs`];
   if (config.mode !== 'production')
-    lines.push('Demo accounts (password for all: ' + demoPassword + '):', ...demoAccounts.map(({ email }) => `  ${email}`));
+    lines.push(`Demo accounts (password for all: ${demoPassword}):`, ...demoAccounts.map(({ email }) => `  ${email}`));
   process.stdout.write(`${lines.join('\n')}\n`);
 }
 

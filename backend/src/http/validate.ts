@@ -60,8 +60,18 @@ function toIssue(issue: Issue, style: 'pointer' | 'name'): ProblemIssue {
     style === 'pointer'
       ? keys.map((key) => `/${String(key).replaceAll('~', '~0').replaceAll('/', '~1')}`).join('')
       : keys.map(String).join('.');
-  const message = issue.code === 'unrecognized_keys' ? `Not a field here: ${issue.keys.join(', ')}.` : issue.message;
+  const message = messageOf(issue);
   return { path, code: issue.code.replaceAll('_', '-'), message };
+}
+
+function messageOf(issue: Issue): string {
+  if (issue.code === 'unrecognized_keys') return `Not a field here: ${issue.keys.join(', ')}.`;
+  if (issue.code === 'invalid_type')
+    return issue.message.endsWith('received undefined') ? 'This is missing.' : `A ${issue.expected} is wanted here.`;
+  if (issue.code === 'too_small' && issue.origin === 'number') return `Out of range: at least ${issue.minimum} is wanted.`;
+  if (issue.code === 'too_big' && issue.origin === 'number') return `Out of range: at most ${issue.maximum} is allowed.`;
+  if (issue.code === 'invalid_value') return `One of ${issue.values.map(String).join(', ')} is wanted here.`;
+  return issue.message;
 }
 
 function sentence(issues: readonly ProblemIssue[]): string {

@@ -6,6 +6,9 @@ export const reasonCodes = {
   'side-blocked': 'A wanted side is largely hidden as the motor and the sensor are set.',
   'blocked-at-every-setting': 'A wanted side stays largely hidden at every motor trim under power and every tilt within reach.',
   'tilt-out-of-range': 'The needed tilt lies outside the range of the bracket; a wedge closes the gap.',
+  'measuring-under-way':
+    'Under way a competent person keeps the helm and looks out; the one who measures sits low, wears a lifejacket and never leans over the transom.',
+  'fuse-near-battery': 'Fuse the power cable near the battery; ask a qualified technician when unsure.',
   'near-a-part': 'The beam passes so near a part that its edge is disturbed.',
   'blocked-or-clear': 'With what is known a wanted side may as well be blocked as clear.',
   'maybe-not-clear': 'A wanted side is clear by the middle figures, but less than nine times in ten.',
@@ -24,6 +27,9 @@ export const cautionCodes = {
   'holes-can-sink':
     'A hole below the waterline can sink a boat: drill as few as possible, check inside first, bed and seal them, and stop if the core is wet.',
   'engine-off': 'Engine off, key out and kill cord off before working near the propeller; support a tilted motor.',
+  'measuring-under-way':
+    'Under way a competent person keeps the helm and looks out; the one who measures sits low, wears a lifejacket and never leans over the transom.',
+  'fuse-near-battery': 'Fuse the power cable near the battery; ask a qualified technician when unsure.',
   'near-a-part': 'The beam passes nearer to a part than the diffraction margin, so its edge may be disturbed.',
   'trim-is-class-value': 'The running trim is a class value; measure it under way before drilling.',
 } as const;
@@ -31,7 +37,7 @@ export type CautionCode = keyof typeof cautionCodes;
 
 export const actionTexts = {
   leave: 'Leave it as it is.',
-  're-tilt': 'Set the tilt to the needed one.',
+  're-tilt': 'Set the tilt anew: to the needed one, or to the nearest one at which both sides are clear.',
   'trim-motor-up': 'Trim the motor up until the beam passes ahead of it.',
   move: 'Move the sensor: farther from the motor, or to the other side.',
   'add-wedge': 'Put a wedge behind the bracket.',

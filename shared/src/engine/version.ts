@@ -1,2 +1,2 @@
 /** Grows whenever a number that the engine answers can change; stands on every answer. */
-export const engineVersion = '0.4.2';
+export const engineVersion = '0.4.3';

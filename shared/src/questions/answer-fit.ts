@@ -65,6 +65,9 @@ export function answerFit(question: FitQuestion, parts: ResolvedParts, context: 
   const cautions: CautionCode[] = ['estimate-only'];
   if (p.parts.mount?.kind !== 'bow-motor' && p.parts.mount?.kind !== 'pole') cautions.push('holes-can-sink');
   if (p.engines.length > 0) cautions.push('engine-off');
+  cautions.push('fuse-near-battery');
+  // Whoever is told to measure the running angle is told how to do it unharmed.
+  if (trim.basis === 'class' || hinges.nextMeasurement?.name === 'running.measuredTrimDeg') cautions.push('measuring-under-way');
   if (sides && wanted.some((side) => isNear(sides[side]))) cautions.push('near-a-part');
   if (trim.basis === 'class') cautions.push('trim-is-class-value');
   const said = rounded({
@@ -102,6 +105,8 @@ function tiltScaleOf(p: Prepared, n: FitNumbers): TiltScale | null {
 function setTilt({ placement }: FitQuestion, scale: TiltScale | null, n: FitNumbers): number | null {
   if (placement.tiltDeg !== undefined) return placement.tiltDeg;
   if (placement.bracketSettingDeg === undefined) return null;
+  // Off the transom there is no face to be square to: the setting is the tilt.
+  if (placement.forwardMm !== undefined) return placement.bracketSettingDeg;
   return placement.bracketSettingDeg + (scale?.transomAngleDeg ?? n.hull.transomAngleDeg) + (scale?.zeroDeg ?? 0);
 }
 

@@ -39,7 +39,21 @@ export function compatibilityOutcomes(question: FitQuestion, p: Prepared, n: Fit
     ...p.parts.lowerUnits.map((_, i) => shaftLength(p, n, i)),
     localBottom(p),
   ];
-  return found.filter((one) => one !== null);
+  return found.filter((one) => one !== null).map((one) => softened(p, one));
+}
+
+/** What the deciding quantity of a rule is called among the assumptions. */
+const decidedBy: Partial<Record<CompatibilityRule, RegExp>> = {
+  'deadrise-range': /^hull\.deadriseDeg$/,
+  'plate-fits': /^hull\.(chineBeamM|transomHeightMm)$/,
+  'housing-fits': /^transducer\.housingLengthMm$/,
+  'shaft-length': /^(hull\.transomHeightMm|lowerUnits\.\d+\.shaftLengthMm)$/,
+};
+
+/** A class default widens an answer, it does not say no: where one decides, the rule is unknown until somebody measures. */
+function softened(p: Prepared, one: Found): Found {
+  const assumed = one.outcome === 'no' ? p.assumptions.find(({ field }) => decidedBy[one.rule]?.test(field)) : undefined;
+  return assumed ? { ...one, outcome: 'unknown', text: `${one.text} That rests on a class value: measure it.`, basis: 'class' } : one;
 }
 
 function mountRules(question: FitQuestion, p: Prepared, n: FitNumbers, mount: MountPart, tilt: TiltAnswer): (Found | null)[] {
@@ -187,9 +201,11 @@ function engineSwing(p: Prepared, n: FitNumbers, setDeg: number): Found | null {
 function shaftLength(p: Prepared, n: FitNumbers, i: number): Found | null {
   const unit = p.parts.lowerUnits[i];
   if (unit?.drive !== 'outboard') return null;
-  const off = (n.lowerUnits[i] as FitNumbers['lowerUnits'][number]).shaftLengthMm - n.hull.transomHeightMm;
+  // A jack plate that lifts the engine takes the place of transom height.
+  const heightMm = n.hull.transomHeightMm + (n.engines[i]?.raiseMm ?? 0);
+  const off = (n.lowerUnits[i] as FitNumbers['lowerUnits'][number]).shaftLengthMm - heightMm;
   const outcome = Math.abs(off) <= 25 ? 'ok' : Math.abs(off) <= 50 ? 'caution' : 'no';
-  const text = `The shaft is ${round(Math.abs(off))} mm ${off < 0 ? 'shorter' : 'longer'} than the transom is high.`;
+  const text = `The shaft is ${round(Math.abs(off))} mm ${off < 0 ? 'shorter' : 'longer'} than the transom${heightMm === n.hull.transomHeightMm ? ' is' : ', with the engine raised, is'} high.`;
   return { rule: 'shaft-length', outcome, text, basis: practice };
 }
 

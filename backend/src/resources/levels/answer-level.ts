@@ -1,3 +1,4 @@
+import { cautionCodes, coded } from '@tiltwright/shared/engine/codes.ts';
 import { euroCoins, runningAngle, shimForAngle, stacksFor, usCoins } from '@tiltwright/shared/engine/level.ts';
 import { degToRad, mmToM, mToMm, radToDeg } from '@tiltwright/shared/engine/units.ts';
 import { engineVersion } from '@tiltwright/shared/engine/version.ts';
@@ -9,17 +10,12 @@ const coins = { none: [], us: usCoins, euro: euroCoins };
 /** Higher than this, a stack does not stand on a moving boat. */
 const highestStackMm = 120;
 
-const underWay = {
-  code: 'measuring-under-way',
-  text: 'A competent person keeps the helm and looks out; the one who measures sits low, wears a lifejacket and never leans over the transom.',
-};
-
 /** @throws ApiProblem invalid-input where the stack would be higher than one that stands */
 export function answerLevel({ ref, readings, stackFor }: LevelQuestion): LevelReply {
   return {
     ...(ref !== undefined && { ref }),
     ...rounded({ angle: readings ? angleOf(readings) : null, stack: stackFor ? stackOf(stackFor) : null }),
-    cautions: [underWay],
+    cautions: [coded(cautionCodes, 'measuring-under-way')],
     engineVersion,
   };
 }

@@ -14,7 +14,7 @@ import type { FitState } from './fit-state.ts';
 /** A part's height is not in the catalog's geometry of the beam; it is drawn as this where it is not stated, mm. */
 const usualHousingMm = { width: 50, height: 35 };
 
-/** `tiltDeg` is the tilt as set; `clearance` null until an answer is there. */
+/** `tiltDeg` is the tilt as set; `clearance` null until an answer is there: no fan is drawn then, which could only be read as clear. */
 export function fitScene(state: FitState, parts: ResolvedParts, tiltDeg: number, clearance: ClearanceAnswer | null): BoatScene {
   const engines = motorOffsetsMm(state).map((offsetMm) => ({
     offsetMm,
@@ -55,8 +55,8 @@ export function fitScene(state: FitState, parts: ResolvedParts, tiltDeg: number,
       tiltRad: degToRad(tiltDeg),
     },
     sectors: {
-      port: state.wanted === 'starboard' || !hasSide ? null : sectorsOf(clearance?.port?.sectors, state),
-      starboard: state.wanted === 'port' || !hasSide ? null : sectorsOf(clearance?.starboard?.sectors, state),
+      port: state.wanted === 'starboard' || !hasSide || !clearance ? null : sectorsOf(clearance.port?.sectors, state),
+      starboard: state.wanted === 'port' || !hasSide || !clearance ? null : sectorsOf(clearance.starboard?.sectors, state),
     },
   };
 }
