@@ -46,14 +46,16 @@ export function scoreCandidate(record: NamedRecord, { words, year, corrected, kn
   const missing: string[] = [];
   for (const word of words) {
     const isNumber = /^\p{N}+$/u.test(word);
-    const weight = isNumber ? numberWeight : own.has(word) || joined.includes(word) || (word.length > 1 && knows(word)) ? 1 : noiseWeight;
+    // A lone letter stands in nearly every name; as a piece of one it says nothing.
+    const isPiece = word.length > 3 && joined.includes(word);
+    const weight = isNumber ? numberWeight : own.has(word) || isPiece || (word.length > 1 && knows(word)) ? 1 : noiseWeight;
     all += weight;
     if (own.has(word)) found += weight;
     else if (corrected.includes(word)) {
       found += weight * slipWorth;
       why.push(`“${word}” is read as another spelling`);
     } else if (word.length > 2 && !/^\p{N}/u.test(word) && [...own].some((mine) => mine.startsWith(word))) found += weight * beginningWorth;
-    else if (word.length > 3 && joined.includes(word)) found += weight;
+    else if (isPiece) found += weight;
     else missing.push(word);
   }
   let score = all === 0 ? 0 : found / all;
