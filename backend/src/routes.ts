@@ -17,6 +17,7 @@ import { keyRoutes } from './resources/keys/routes.ts';
 import { levelRoutes } from './resources/levels/routes.ts';
 import { limitRoutes } from './resources/limits/routes.ts';
 import { mailRoutes } from './resources/mail/routes.ts';
+import { matchRoutes } from './resources/matches/routes.ts';
 import { meRoutes } from './resources/me/routes.ts';
 import { questionRoutes } from './resources/questions/routes.ts';
 import { resolveRoutes } from './resources/resolve/routes.ts';
@@ -25,8 +26,8 @@ import { secondFactorRoutes } from './resources/second-factor/routes.ts';
 import { sessionRoutes } from './resources/session/routes.ts';
 import { shareRoutes } from './resources/shares/routes.ts';
 import { usageRoutes } from './resources/usage/routes.ts';
-import { webhookRoutes } from './resources/webhooks/routes.ts';
 import { userRoutes } from './resources/users/routes.ts';
+import { webhookRoutes } from './resources/webhooks/routes.ts';
 
 /** Everything the API can do. */
 export function allRoutes(deps: Deps): Route[] {
@@ -39,6 +40,7 @@ export function allRoutes(deps: Deps): Route[] {
     ...resolveRoutes(deps),
     ...questionRoutes(deps),
     ...batchRoutes(deps),
+    ...matchRoutes(deps),
     ...levelRoutes(),
     ...sessionRoutes(deps),
     ...accountRoutes(deps),

@@ -43,6 +43,7 @@ const tagWords: Record<string, string> = {
   Accounts: 'Signing up, in and out; one’s own account.',
   Administration: 'People, invitations, the audit log, mails and the site’s health.',
   'API keys': 'Keys for programs.',
+  Jobs: 'Work that takes longer than a request.',
   Webhooks: 'Messages about what happens, by the Standard Webhooks specification.',
   Limits: 'How much each kind of caller may ask.',
   Boats: 'A person’s own boats.',

@@ -1,5 +1,5 @@
 import type { CatalogTable } from '@tiltwright/shared/schemas/catalog-record.ts';
-import { and, asc, desc, eq, gte, inArray, isNull, lte, or, type SQL, sql } from 'drizzle-orm';
+import { and, asc, count, desc, eq, gt, gte, inArray, isNull, lte, or, type SQL, sql } from 'drizzle-orm';
 import type { Db } from '../../db/connect.ts';
 import { editions, hulls, makers, revisions, trimPoints } from '../../db/schema/catalog.ts';
 import { firstChanges } from '../editions/first-changes.ts';
@@ -52,6 +52,24 @@ export function pickRecords(db: Db, kind: CatalogTable, ids: readonly string[], 
   const byId = new Map(rows.map((row) => [row.id, row]));
   return ids.flatMap((id) => byId.get(id) ?? []);
 }
+
+/** Ids of the hulls that pass the filter, in the order of ids. */
+export const hullIdsAfter = (db: Db, filter: ListFilter, after: string | undefined, limit: number): string[] =>
+  db
+    .select({ id: hulls.id })
+    .from(hulls)
+    .where(and(...conditions('hulls', filter), ...(after === undefined ? [] : [gt(hulls.id, after)])))
+    .orderBy(asc(hulls.id))
+    .limit(limit)
+    .all()
+    .map(({ id }) => id);
+
+export const countHulls = (db: Db, filter: ListFilter): number =>
+  db
+    .select({ n: count() })
+    .from(hulls)
+    .where(and(...conditions('hulls', filter)))
+    .get()!.n;
 
 function conditions(kind: CatalogTable, filter: ListFilter): SQL[] {
   const { table } = kinds[kind];
