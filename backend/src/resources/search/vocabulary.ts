@@ -26,8 +26,9 @@ export function loadVocabulary(db: Db): Vocabulary {
   const beginnings = new SymSpell({ maxDistance: 1, verbosity: 2 });
   const wordsByBeginning = new Map<string, string[]>();
   for (const { term } of rows) {
-    // Digits are read as they stand: 14 and 16 are two boats, not a slip.
-    if (/^\p{N}+$/u.test(term)) continue;
+    // Digits are read as they stand: 14 and 16 are two boats, not a slip. Words of the question are of letters or of digits,
+    // so that joined names like `kido12`, of which a large catalog has a hundred thousand, are nobody's slip either.
+    if (/\p{N}/u.test(term)) continue;
     whole.add(term);
     for (let length = shortestBeginning; length < term.length; length++) {
       const beginning = term.slice(0, length);
