@@ -3,6 +3,7 @@ import type { Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import path from 'node:path';
 import Database from 'better-sqlite3';
+import type { Express } from 'express';
 import { pino } from 'pino';
 import { createApp } from './app.ts';
 import { type Config, readConfig } from './config.ts';
@@ -11,6 +12,7 @@ import { migrateDatabase } from './db/migrate.ts';
 import { demoAccounts, demoPassword, seedDemoWorld } from './db/seed.ts';
 import { createDeps } from './deps.ts';
 import { fitPool } from './fit-pool/fit-pool.ts';
+import { expressServer } from './http/express-server.ts';
 import type { ImportJobs } from './jobs/import-jobs.ts';
 import { inProcessJobs } from './jobs/in-process-jobs.ts';
 import { workerJobs } from './jobs/worker-jobs.ts';
@@ -34,7 +36,7 @@ async function start(): Promise<void> {
   const deps = createDeps(db, config, { jobs: importJobs(db, config), pool: fitPool(config.fitThreads) });
   const app = createApp(deps, logger);
   // First the port, then the work left over: where another server has both port and folder, nothing of its is touched.
-  const server = await listen(app.listen.bind(app), config);
+  const server = await listen(app, config);
   recoverImports(db, deps.jobs, (error) => logger.error({ err: error }, 'a check taken up again failed'));
   const flushing = setInterval(() => {
     if (!deps.jobs.isWriting()) deps.usage.flush();
@@ -69,17 +71,17 @@ function openDatabase(config: Config): Db {
   }
 }
 
-function listen(open: (port: number, host: string, done: (error?: Error) => void) => Server, config: Config): Promise<Server> {
+function listen(app: Express, config: Config): Promise<Server> {
   return new Promise((resolve, reject) => {
-    const server = open(config.port, config.host, (error) => {
-      if (!error) return resolve(server);
-      const { code } = error as NodeJS.ErrnoException;
+    const server = expressServer(app);
+    server.once('error', ({ code }: NodeJS.ErrnoException) => {
       const reason =
         code === 'EADDRINUSE'
           ? `Port ${config.port} is taken by another program`
           : `The server cannot listen on ${config.host}:${config.port} (${code})`;
       reject(new StartProblem(`${reason}; choose another with PORT.`));
     });
+    server.listen(config.port, config.host, () => resolve(server));
   });
 }
 
