@@ -7,7 +7,8 @@ import * as z from 'zod';
 import { topFolder } from './paths.ts';
 import { StartProblem } from './start-problem.ts';
 
-const limit = (usual: number) => z.coerce.number().int().min(1).max(1e9).default(usual);
+const units = z.coerce.number().int().min(1).max(1e9);
+const limit = (usual: number) => units.default(usual);
 
 const Settings = z.object({
   PORT: z.coerce.number().int().min(0).max(65535).default(4310).describe('Port of site and API; 0 takes any free one.'),
@@ -58,7 +59,9 @@ const Settings = z.object({
     .max(23)
     .default(3)
     .describe('Hour of the night, by this machine’s clock, at which old things are removed.'),
-  LIMIT_ANONYMOUS: limit(60).describe('Units a minute for an address nobody is signed in from; the admin can change all limits later.'),
+  LIMIT_ANONYMOUS: units
+    .optional()
+    .describe('Units a minute for an address nobody is signed in from: 60, in a trial 6000. The admin can change all limits later.'),
   LIMIT_PAGE: limit(1200).describe('Units a minute for the pages of this site in one browser.'),
   LIMIT_ACCOUNT: limit(600).describe('Units a minute for an account.'),
   LIMIT_KEY: limit(6000).describe('Units a minute for an API key.'),
@@ -158,7 +161,8 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     webhookPrivateTargets: settings.WEBHOOK_PRIVATE_TARGETS === 'true',
     keepDeliveriesDays: settings.KEEP_DELIVERIES_DAYS,
     limits: {
-      anonymous: settings.LIMIT_ANONYMOUS,
+      // A trial serves this machine alone: whoever tries it out is not to run dry after three checks.
+      anonymous: settings.LIMIT_ANONYMOUS ?? (settings.NODE_ENV === 'trial' ? 6000 : 60),
       page: settings.LIMIT_PAGE,
       account: settings.LIMIT_ACCOUNT,
       key: settings.LIMIT_KEY,

@@ -60,7 +60,7 @@ test('a newcomer signs up, follows the mail’s link, is signed in, and turns a 
   const leaving = page.getByRole('region', { name: 'Delete the account' });
   await leaving.getByLabel('Password').fill('twelve or more');
   await leaving.getByRole('button', { name: 'Delete my account' }).click();
-  await expect(page.getByRole('link', { name: 'Sign in' })).toBeVisible();
+  await expect(page.getByRole('banner').getByRole('link', { name: 'Sign in' })).toBeVisible();
   expect(complaints).toEqual([]);
 });
 
